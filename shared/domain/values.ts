@@ -1,0 +1,35 @@
+import { z } from 'zod';
+
+/** Values that many resources share. Times are whole milliseconds, dates are calendar dates in the team's time zone. */
+
+export const Id = z.uuid();
+export type Id = z.infer<typeof Id>;
+
+export const Ms = z.int().min(0).max(86_400_000);
+
+/** A calendar date, `2026-03-03`, that exists. */
+export const CalendarDate = z.iso.date();
+export type CalendarDate = z.infer<typeof CalendarDate>;
+
+export const Instant = z.iso.datetime();
+
+export const Version = z.int().min(0);
+
+/** One line of text as people type it: trimmed, not empty, no control characters. */
+export const shortText = (max: number) =>
+  z
+    .string()
+    .trim()
+    .min(1, 'Write something here.')
+    .max(max, `At most ${max} characters.`)
+    // biome-ignore lint/suspicious/noControlCharactersInRegex: they are what is refused
+    .regex(/^[^\u0000-\u001f\u007f]*$/, 'Only one line of plain text fits here.');
+
+/** Several lines of text; may be empty. */
+export const longText = (max: number) =>
+  z
+    .string()
+    .trim()
+    .max(max, `At most ${max} characters.`)
+    // biome-ignore lint/suspicious/noControlCharactersInRegex: NUL cannot be stored in PostgreSQL's text
+    .regex(/^[^\u0000]*$/, 'Plain text only.');
