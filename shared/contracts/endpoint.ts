@@ -83,7 +83,8 @@ export function paramsOf(path: string): string[] {
 export const Nothing = z.object({});
 
 /** A page of a list, and where the next one starts. */
-export const page = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), nextCursor: z.string().nullable() });
+export const page = <T extends z.ZodType>(item: T) =>
+  z.object({ items: z.array(item), nextCursor: z.string().nullable() });
 
 export const PageQuery = z.object({
   cursor: z.string().max(200).optional(),
