@@ -1,0 +1,54 @@
+import type { ErrorRequestHandler, RequestHandler } from 'express';
+import { AppError } from '../../shared/errors';
+
+type BodyParserError = { type?: string; status?: number };
+
+/** What the platform's own parsers say, in our codes. */
+function known(error: unknown): AppError | null {
+  if (error instanceof AppError) return error;
+  const { type } = (error ?? {}) as BodyParserError;
+  if (type === 'entity.too.large') return new AppError('tooLarge');
+  if (type === 'entity.parse.failed') return new AppError('invalid', { message: 'The request’s body is no JSON.' });
+  if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('wrongType');
+  if (error instanceof URIError) return new AppError('notFound');
+  if ((error as { code?: string } | null)?.code === '22P02') return new AppError('notFound');
+  return null;
+}
+
+const goneCodes = new Set(['ECONNABORTED', 'ECONNRESET', 'ERR_STREAM_PREMATURE_CLOSE', 'EPIPE']);
+
+/** The one place where an error becomes an answer. */
+export const answerError: ErrorRequestHandler = (error, req, res, next) => {
+  const gone =
+    req.destroyed ||
+    goneCodes.has((error as { code?: string }).code ?? '') ||
+    (error as BodyParserError).type === 'request.aborted';
+  if (gone && !(error instanceof AppError)) {
+    // a client that went away is not an error
+    res.destroy();
+    return;
+  }
+  const refusal = known(error);
+  if (!refusal) req.log?.error({ err: error }, 'unexpected');
+  if (res.headersSent) {
+    next(error);
+    return;
+  }
+  const said = refusal ?? new AppError('broken');
+  if (said.retryAfterSeconds !== undefined)
+    res.setHeader('Retry-After', String(Math.max(1, Math.ceil(said.retryAfterSeconds))));
+  res.setHeader('Cache-Control', 'no-store');
+  res.status(said.status).json({
+    error: {
+      code: said.code,
+      message: said.message,
+      ...(said.fields ? { fields: said.fields } : {}),
+      ...(said.current !== undefined ? { current: said.current } : {}),
+      requestId: req.requestId,
+    },
+  });
+};
+
+export const answerNotFound: RequestHandler = () => {
+  throw new AppError('notFound');
+};

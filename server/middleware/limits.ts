@@ -1,0 +1,67 @@
+import type { RequestHandler } from 'express';
+import type pg from 'pg';
+import { RateLimiterPostgres, type RateLimiterRes } from 'rate-limiter-flexible';
+import type { RateLimit } from '../../shared/contracts/endpoint';
+import { AppError } from '../../shared/errors';
+
+/** Points a minute (or the time given) by address, and by account where there is one; counted in PostgreSQL for all processes. */
+const buckets = {
+  read: { points: 1200, seconds: 60 },
+  search: { points: 240, seconds: 60 },
+  write: { points: 120, seconds: 60 },
+  signIn: { points: 20, seconds: 300 },
+  mail: { points: 10, seconds: 3600 },
+} as const satisfies Record<RateLimit, { points: number; seconds: number }>;
+
+/** Tries at one account, from wherever: guessing is slow, and its owner is never locked out for long. */
+const perAccount = { points: 8, seconds: 300 };
+
+export type Limits = ReturnType<typeof openLimits>;
+
+export function openLimits(pool: pg.Pool, scale = 1) {
+  const open = (keyPrefix: string, { points, seconds }: { points: number; seconds: number }) =>
+    new RateLimiterPostgres({
+      storeClient: pool,
+      storeType: 'client',
+      tableName: 'rate_limits',
+      tableCreated: true,
+      keyPrefix,
+      points: Math.ceil(points * scale),
+      duration: seconds,
+      clearExpiredByTimeout: false,
+    });
+  const byAddress = Object.fromEntries(
+    Object.entries(buckets).map(([name, bucket]) => [name, open(name, bucket)]),
+  ) as unknown as Record<RateLimit, RateLimiterPostgres>;
+  const byAccount = open('account', perAccount);
+
+  return {
+    /** the first layer of a route's stack */
+    layer(bucket: RateLimit): RequestHandler {
+      return async (req, _res, next) => {
+        await take(byAddress[bucket], req.ip ?? 'unknown');
+        next();
+      };
+    },
+    /** @throws AppError `tooOften` when one account's password was tried too often */
+    async takeForAccount(email: string): Promise<void> {
+      await take(byAccount, email);
+    },
+    async forgetAccount(email: string): Promise<void> {
+      await byAccount.delete(email);
+    },
+  };
+}
+
+async function take(limiter: RateLimiterPostgres, key: string): Promise<void> {
+  try {
+    await limiter.consume(key.slice(0, 200));
+  } catch (refusal) {
+    if (refusal instanceof Error) throw refusal;
+    const retryAfterSeconds = Math.ceil((refusal as RateLimiterRes).msBeforeNext / 1000);
+    throw new AppError('tooOften', {
+      retryAfterSeconds,
+      message: `Too many tries. Wait ${retryAfterSeconds < 90 ? `${retryAfterSeconds} seconds` : `${Math.ceil(retryAfterSeconds / 60)} minutes`} and try again.`,
+    });
+  }
+}

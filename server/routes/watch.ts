@@ -1,0 +1,3 @@
+import type { Route } from './on';
+
+export const watchRoutes: Route[] = [];
