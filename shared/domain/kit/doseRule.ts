@@ -5,7 +5,11 @@ import { Dose } from '../training/dose';
 export const DoseRule = z.discriminatedUnion('type', [
   z.object({ type: z.literal('same') }),
   z.object({ type: z.literal('samePerSide') }),
-  z.object({ type: z.literal('times'), factor: z.number().positive().max(20), cap: z.number().positive().max(10_000).nullable().default(null) }),
+  z.object({
+    type: z.literal('times'),
+    factor: z.number().positive().max(20),
+    cap: z.number().positive().max(10_000).nullable().default(null),
+  }),
   z.object({
     type: z.literal('secondsForReps'),
     secondsPerRep: z.number().positive().max(60),
