@@ -1,4 +1,5 @@
-import { Logger, makeWorkerUtils, type Runner, run, type TaskList } from 'graphile-worker';
+import { EventEmitter } from 'node:events';
+import { Logger, makeWorkerUtils, type Runner, run, type TaskList, type WorkerEvents } from 'graphile-worker';
 import pg from 'pg';
 import type { Log } from '../middleware/log';
 import type { Handler } from './handler';
@@ -40,7 +41,12 @@ export async function startQueue(
     ]),
   );
 
+  // listened to before the first worker exists
+  const events: WorkerEvents = new EventEmitter();
+  events.on('worker:create', ({ worker }) => workerIds.add(worker.workerId));
+  events.on('worker:stop', ({ worker }) => workerIds.delete(worker.workerId));
   const runner: Runner = await run({
+    events,
     pgPool: pool,
     taskList,
     concurrency: jobsAtOnce,
@@ -48,8 +54,6 @@ export async function startQueue(
     pollInterval: 1000,
     logger,
   });
-  runner.events.on('worker:create', ({ worker }) => workerIds.add(worker.workerId));
-  runner.events.on('worker:release', ({ worker }) => workerIds.delete(worker.workerId));
   const stopBeating = keepBeating(() => [...workerIds], utils, log);
 
   return {
