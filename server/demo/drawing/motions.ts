@@ -1,0 +1,16 @@
+import type { Motion } from './motion';
+import * as floorwork from './motions/floorwork';
+import * as fronts from './motions/fronts';
+import * as hinges from './motions/hinges';
+import * as pulls from './motions/pulls';
+import * as squats from './motions/squats';
+import * as walks from './motions/walks';
+
+/** Everything that a figure can be shown doing, by name. */
+export const motions = { ...floorwork, ...fronts, ...hinges, ...pulls, ...squats, ...walks } as const satisfies Record<
+  string,
+  Motion
+>;
+
+export type MotionName = keyof typeof motions;
+export const motionNames = Object.keys(motions) as MotionName[];
