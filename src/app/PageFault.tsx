@@ -1,0 +1,38 @@
+import { useRouteError } from 'react-router-dom';
+import { Button } from '../components/Button';
+import { ErrorPage } from '../components/ErrorPage';
+import { GoLink } from '../components/GoButton';
+import { ApiError } from '../lib/api';
+import { PlainLayout } from './layouts/PlainLayout';
+
+/** Where a page's errors end up: what it could not load, or what broke in it. */
+export function PageFault() {
+  const error = useRouteError();
+  const again = <Button onClick={() => location.reload()}>Load the page again</Button>;
+  const home = <GoLink to="/">To your team</GoLink>;
+  return (
+    <PlainLayout>
+      {error instanceof ApiError && error.code === 'notFound' ? (
+        <ErrorPage title="There is nothing here" actions={home}>
+          {error.message}
+        </ErrorPage>
+      ) : error instanceof ApiError ? (
+        <ErrorPage title="The page did not arrive" requestId={error.requestId ?? undefined} actions={again}>
+          {error.message}
+        </ErrorPage>
+      ) : (
+        <ErrorPage
+          title="Something broke on this page"
+          actions={
+            <>
+              {again}
+              {home}
+            </>
+          }
+        >
+          Nothing that was saved is lost. If it happens again, tell the owner what you did.
+        </ErrorPage>
+      )}
+    </PlainLayout>
+  );
+}
