@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { Id, Ms, longText, shortText } from '../values';
+import { Id, longText, Ms, shortText } from '../values';
 import { chapterKinds, missingThings } from '../words';
 
 /** A marked stretch of a recording. Chapters are in order, never overlap and never nest; gaps are allowed. */
