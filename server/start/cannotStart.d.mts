@@ -1,0 +1,2 @@
+export class CannotStart extends Error {}
+export function giveUp(error: unknown): never;
