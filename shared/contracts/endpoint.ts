@@ -65,13 +65,18 @@ export function endpoint<
 // biome-ignore lint/suspicious/noExplicitAny: the shape of any endpoint, whatever its types
 export type Endpoint = Definition<string, any, any, z.ZodType>;
 
-type InputOf<T> = T extends z.ZodType ? z.input<T> : unknown;
-type OutputOf<T> = T extends z.ZodType ? z.output<T> : undefined;
+type InputOf<T> = [T] extends [z.ZodType] ? z.input<T> : unknown;
+type OutputOf<T> = [T] extends [z.ZodType] ? z.output<T> : undefined;
+
+// biome-ignore-start lint/suspicious/noExplicitAny: only one part of the definition is looked at
+type BodySchema<E extends Endpoint> = E extends Definition<any, any, infer B, any> ? B : never;
+type QuerySchema<E extends Endpoint> = E extends Definition<any, infer Q, any, any> ? Q : never;
+// biome-ignore-end lint/suspicious/noExplicitAny: above
 
 /** What a caller gives: path parameters, query and body side by side. */
-export type Input<E extends Endpoint> = Params<E['path']> & InputOf<E['query']> & InputOf<E['body']>;
-export type Body<E extends Endpoint> = OutputOf<E['body']>;
-export type Query<E extends Endpoint> = OutputOf<E['query']>;
+export type Input<E extends Endpoint> = Params<E['path']> & InputOf<QuerySchema<E>> & InputOf<BodySchema<E>>;
+export type Body<E extends Endpoint> = OutputOf<BodySchema<E>>;
+export type Query<E extends Endpoint> = OutputOf<QuerySchema<E>>;
 export type Output<E extends Endpoint> = z.output<E['response']>;
 
 /** The names of a path's parameters, in order. */
