@@ -16,6 +16,7 @@ export default defineConfig({
     // two cores, and ffmpeg wants one
     maxWorkers: 2,
     pool: 'forks',
+    env: { AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true' },
     projects: [
       suite('domain'),
       suite('standards'),

@@ -11,6 +11,9 @@ import { secretsIn } from './secrets';
 import { step } from './step.mjs';
 import { keepRunning, type Supervised } from './supervisor';
 
+// the pinned version of the SDK works on this Node; its notice about later ones is for us and not for who starts this
+process.env.AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED = 'true';
+
 type Plan = {
   entries: Entries;
   dataFolder: string;
