@@ -194,7 +194,9 @@ describe('a playback that is made', { timeout: 120_000 }, () => {
     ['wide', '1920x1080', 1280, 720],
     ['small', '160x90', 160, 90],
   ])('has even sides within 1280 × 720 when the picture is %s', async (_what, size, width, height) => {
-    const { playback, made } = await playbackOf(await clip(`size${size}.mkv`, [...drawn(size, 0.5, '10'), '-c:v', 'mpeg4']));
+    const { playback, made } = await playbackOf(
+      await clip(`size${size}.mkv`, [...drawn(size, 0.5, '10'), '-c:v', 'mpeg4']),
+    );
     expect(playback).toMatchObject({ how: 'made', width, height });
     expect(made).toMatchObject(playsEverywhere);
   });
