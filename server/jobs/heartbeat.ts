@@ -10,9 +10,15 @@ const deadAfterSeconds = 30;
 /**
  * A worker that is killed keeps its jobs locked for hours. So each one says that it lives, and each one frees what
  * those hold that no longer do.
+ * @param then done after each beat, when the dead workers' jobs are free
  * @returns the end of it
  */
-export function keepBeating(workerIds: () => string[], utils: WorkerUtils, log: Log): () => Promise<void> {
+export function keepBeating(
+  workerIds: () => string[],
+  utils: WorkerUtils,
+  log: Log,
+  then: () => Promise<void>,
+): () => Promise<void> {
   let running: Promise<void> = Promise.resolve();
   const beat = async () => {
     try {
@@ -21,11 +27,8 @@ export function keepBeating(workerIds: () => string[], utils: WorkerUtils, log: 
           'insert into worker_heartbeats (worker_id, seen_at) values (:id, now()) on conflict (worker_id) do update set seen_at = now()',
           { replacements: { id } },
         );
-      const dead = await deadWorkers();
-      if (dead.length === 0) return;
-      await utils.forceUnlockWorkers(dead);
-      await database().query('delete from worker_heartbeats where worker_id in (:dead)', { replacements: { dead } });
-      log.warn({ workers: dead }, 'freed the jobs of workers that are gone');
+      await freeDead(utils, log);
+      await then();
     } catch (error) {
       log.warn({ err: error }, 'heartbeat failed');
     }
@@ -43,6 +46,14 @@ export function keepBeating(workerIds: () => string[], utils: WorkerUtils, log: 
         .query('delete from worker_heartbeats where worker_id in (:ids)', { replacements: { ids } })
         .catch(() => undefined);
   };
+}
+
+async function freeDead(utils: WorkerUtils, log: Log): Promise<void> {
+  const dead = await deadWorkers();
+  if (dead.length === 0) return;
+  await utils.forceUnlockWorkers(dead);
+  await database().query('delete from worker_heartbeats where worker_id in (:dead)', { replacements: { dead } });
+  log.warn({ workers: dead }, 'freed the jobs of workers that are gone');
 }
 
 /** Workers that hold a job, or once said that they live, and were not heard of since. */

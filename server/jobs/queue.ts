@@ -2,6 +2,7 @@ import { EventEmitter } from 'node:events';
 import { Logger, makeWorkerUtils, type Runner, run, type TaskList, type WorkerEvents } from 'graphile-worker';
 import pg from 'pg';
 import type { Log } from '../middleware/log';
+import { clearExhausted, stoppedMessage } from './exhausted';
 import type { Handler } from './handler';
 import { keepBeating } from './heartbeat';
 
@@ -54,11 +55,16 @@ export async function startQueue(
     pollInterval: 1000,
     logger,
   });
-  const stopBeating = keepBeating(() => [...workerIds], utils, log);
+  const stopBeating = keepBeating(
+    () => [...workerIds],
+    utils,
+    log,
+    () => clearExhausted(handlers, log),
+  );
 
   return {
     async stop() {
-      stopping.abort(new Error('The worker stops.'));
+      stopping.abort(new Error(stoppedMessage));
       await runner.stop().catch((error: unknown) => log.warn({ err: error }, 'queue stopped hard'));
       await stopBeating();
       await utils.release();
