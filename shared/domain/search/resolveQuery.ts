@@ -79,7 +79,8 @@ const spelledOut = (query: string) =>
 
 const asResolved = ({ id, score, matched }: Match): ResolvedMovement => ({
   id,
-  score: Math.round(score * 1000) / 1000,
+  // down, so that nothing short of sure reads as sure
+  score: Math.floor(score * 1000) / 1000,
   matched,
 });
 
