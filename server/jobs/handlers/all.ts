@@ -16,6 +16,7 @@ export function allHandlers(config: Config): Handler[] {
     makePlaybackHandler,
     makeChapterPicturesHandler,
     removeObjectsHandler,
+    drawDemoRecordingHandler,
     sendMailHandler(config.mail),
   ];
 }
