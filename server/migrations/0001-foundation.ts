@@ -42,6 +42,8 @@ create table memberships (
   team_id uuid not null references teams (id) on delete cascade,
   person_id uuid not null references people (id) on delete cascade,
   role text not null check (role in ('owner', 'coach', 'editor', 'member')),
+  -- when the person last said what kit they own; tells "nothing" from "not asked yet"
+  kit_told_at timestamptz,
   created_at timestamptz not null default now(),
   updated_at timestamptz not null default now(),
   primary key (team_id, person_id)

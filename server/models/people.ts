@@ -33,6 +33,8 @@ export class Membership extends Model<InferAttributes<Membership>, InferCreation
   declare teamId: string;
   declare personId: string;
   declare role: Role;
+  /** when the person last said what kit they own; null until then */
+  declare kitToldAt: CreationOptional<Date | null>;
   declare createdAt: CreationOptional<Date>;
 }
 
@@ -87,7 +89,7 @@ export function initPeople(sequelize: Sequelize): void {
     { sequelize, tableName: 'teams' },
   );
   Membership.init(
-    { teamId: keyPart(teamId), personId: keyPart(uuid), role: text, createdAt: instant },
+    { teamId: keyPart(teamId), personId: keyPart(uuid), role: text, kitToldAt: instantOrNull, createdAt: instant },
     { sequelize, tableName: 'memberships' },
   );
   MailLink.init(
