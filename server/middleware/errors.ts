@@ -11,8 +11,16 @@ function known(error: unknown): AppError | null {
   if (type === 'entity.parse.failed') return new AppError('invalid', { message: 'The request’s body is no JSON.' });
   if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('wrongType');
   if (error instanceof URIError) return new AppError('notFound');
-  if ((error as { code?: string } | null)?.code === '22P02') return new AppError('notFound');
+  // PostgreSQL's text holds no NUL
+  if (databaseCode(error) === '22021') return new AppError('invalid', { message: 'Plain text only.' });
+  if (databaseCode(error) === '22P02') return new AppError('notFound');
   return null;
+}
+
+/** PostgreSQL's code, also inside Sequelize's own error. */
+function databaseCode(error: unknown): string | undefined {
+  const { code, original } = (error ?? {}) as { code?: string; original?: { code?: string } };
+  return original?.code ?? code;
 }
 
 const goneCodes = new Set(['ECONNABORTED', 'ECONNRESET', 'ERR_STREAM_PREMATURE_CLOSE', 'EPIPE']);

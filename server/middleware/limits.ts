@@ -10,11 +10,15 @@ const buckets = {
   search: { points: 240, seconds: 60 },
   write: { points: 120, seconds: 60 },
   signIn: { points: 20, seconds: 300 },
-  mail: { points: 10, seconds: 3600 },
+  // an owner invites a whole team in one evening
+  mail: { points: 60, seconds: 3600 },
 } as const satisfies Record<RateLimit, { points: number; seconds: number }>;
 
 /** Tries at one account, from wherever: guessing is slow, and its owner is never locked out for long. */
 const perAccount = { points: 8, seconds: 300 };
+
+/** Mails that strangers can have sent to one address. */
+const perMailbox = { points: 5, seconds: 3600 };
 
 export type Limits = ReturnType<typeof openLimits>;
 
@@ -28,12 +32,14 @@ export function openLimits(pool: pg.Pool, scale = 1) {
       keyPrefix,
       points: Math.ceil(points * scale),
       duration: seconds,
-      clearExpiredByTimeout: false,
+      // rows whose time is over go; the timer holds up no exit
+      clearExpiredByTimeout: true,
     });
   const byAddress = Object.fromEntries(
     Object.entries(buckets).map(([name, bucket]) => [name, open(name, bucket)]),
   ) as unknown as Record<RateLimit, RateLimiterPostgres>;
   const byAccount = open('account', perAccount);
+  const byMailbox = open('mailbox', perMailbox);
 
   return {
     /** the first layer of a route's stack */
@@ -46,6 +52,10 @@ export function openLimits(pool: pg.Pool, scale = 1) {
     /** @throws AppError `tooOften` when one account's password was tried too often */
     async takeForAccount(email: string): Promise<void> {
       await take(byAccount, email);
+    },
+    /** @throws AppError `tooOften` when too many mails to one address were asked for, known or not */
+    async takeForMailbox(email: string): Promise<void> {
+      await take(byMailbox, email);
     },
     async forgetAccount(email: string): Promise<void> {
       await byAccount.delete(email);

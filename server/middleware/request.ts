@@ -1,11 +1,15 @@
 import type { Request } from 'express';
 import type { Actor } from '../services/actor';
+import type { Account } from '../services/signIns';
+import type { Limits } from './limits';
 
 /** What the layers of the stack leave on a request for the next one. */
 declare module 'express-serve-static-core' {
   interface Request {
     requestId: string;
     actor?: Actor;
+    /** counts the tries at one account's password */
+    accountTries: Limits;
   }
 }
 
@@ -18,12 +22,7 @@ declare module 'express-session' {
 
 declare global {
   namespace Express {
-    interface User {
-      id: string;
-      name: string;
-      email: string;
-      noticeReadAt: Date | null;
-    }
+    interface User extends Account {}
   }
 }
 

@@ -1,5 +1,5 @@
 import connectPgSimple from 'connect-pg-simple';
-import type { RequestHandler } from 'express';
+import type { Request, RequestHandler, Response } from 'express';
 import session from 'express-session';
 import passport from 'passport';
 import { Strategy as LocalStrategy } from 'passport-local';
@@ -7,8 +7,7 @@ import type pg from 'pg';
 import { AppError } from '../../shared/errors';
 import { limits } from '../../shared/limits';
 import type { Config } from '../config';
-import { Person } from '../models/people';
-import { passwordFits } from '../services/passwords';
+import { type Account, accountById, accountWith, sweepSignIns } from '../services/signIns';
 import type { Limits } from './limits';
 
 const dayMs = 24 * 60 * 60 * 1000;
@@ -33,35 +32,34 @@ export function signInLayers(config: Config, pool: pg.Pool, rateLimits: Limits):
         maxAge: limits.sessionIdleDays * dayMs,
       },
     }),
-    localPassport(rateLimits).session(),
+    (req, _res, next) => {
+      req.accountTries = rateLimits;
+      next();
+    },
+    localPassport().session(),
     endOldSignIn,
   ];
 }
 
 export const cookieName = (isHttps: boolean): string => (isHttps ? '__Host-tapeline' : 'tapeline');
 
-function localPassport(rateLimits: Limits): passport.PassportStatic {
+function localPassport(): passport.PassportStatic {
   passport.use(
-    new LocalStrategy({ usernameField: 'email' }, async (typed, password, done) => {
-      try {
-        const email = typed.trim().toLowerCase();
-        await rateLimits.takeForAccount(email);
-        const person = await Person.findOne({ where: { email } });
-        // ASVS 5.0 6.3.8: an unknown address costs the same time and gets the same answer
-        const fits = await passwordFits(person?.passwordHash ?? null, password);
-        if (!person || !fits) return done(null, false);
-        await rateLimits.forgetAccount(email);
-        return done(null, asUser(person));
-      } catch (error) {
-        return done(error);
-      }
-    }),
+    new LocalStrategy(
+      { usernameField: 'email', passReqToCallback: true },
+      async (req: Request, typed: string, password: string, done) => {
+        try {
+          done(null, (await accountFor(req, typed, password)) ?? false);
+        } catch (error) {
+          done(error);
+        }
+      },
+    ),
   );
   passport.serializeUser((user, done) => done(null, user.id));
   passport.deserializeUser(async (id: string, done) => {
     try {
-      const person = await Person.findByPk(id);
-      done(null, person ? asUser(person) : false);
+      done(null, (await accountById(id)) ?? false);
     } catch (error) {
       done(error);
     }
@@ -69,12 +67,14 @@ function localPassport(rateLimits: Limits): passport.PassportStatic {
   return passport;
 }
 
-const asUser = (person: Person): Express.User => ({
-  id: person.id,
-  name: person.name,
-  email: person.email,
-  noticeReadAt: person.noticeReadAt,
-});
+/** The account that a typed e-mail and password belong to; every try counts. @throws AppError `tooOften` */
+export async function accountFor(req: Request, typed: string, password: string): Promise<Account | null> {
+  const email = typed.trim().toLowerCase();
+  await req.accountTries.takeForAccount(email);
+  const account = await accountWith(email, password);
+  if (account) await req.accountTries.forgetAccount(email);
+  return account;
+}
 
 /** ASVS 5.0 7.3: a sign-in ends at the latest after `sessionMaxDays`, however often it is used. */
 const endOldSignIn: RequestHandler = (req, _res, next) => {
@@ -87,7 +87,7 @@ const endOldSignIn: RequestHandler = (req, _res, next) => {
 };
 
 /** Runs passport's local strategy as a promise. @throws AppError `wrongSignIn`, `tooOften` */
-export function checkPassword(req: Parameters<RequestHandler>[0]): Promise<Express.User> {
+export function checkPassword(req: Request): Promise<Express.User> {
   return new Promise((resolve, reject) => {
     passport.authenticate('local', (error: unknown, user: Express.User | false) => {
       if (error) reject(error);
@@ -98,8 +98,9 @@ export function checkPassword(req: Parameters<RequestHandler>[0]): Promise<Expre
 }
 
 /** Starts a sign-in under a new session id, which passport renews (ASVS 5.0 7.2.4). */
-export function startSignIn(req: Parameters<RequestHandler>[0], user: Express.User): Promise<void> {
-  return new Promise((resolve, reject) => {
+export async function startSignIn(req: Request, user: Express.User): Promise<void> {
+  await sweepSignIns();
+  await new Promise<void>((resolve, reject) => {
     req.logIn(user, (error) => {
       if (error) return reject(error);
       req.session.signedInAt = Date.now();
@@ -108,6 +109,9 @@ export function startSignIn(req: Parameters<RequestHandler>[0], user: Express.Us
   });
 }
 
-export function endSignIn(req: Parameters<RequestHandler>[0]): Promise<void> {
-  return new Promise((resolve, reject) => req.session.destroy((error) => (error ? reject(error) : resolve())));
+/** Ends this sign-in: its row goes, and the cookie with it. */
+export async function endSignIn(req: Request, res: Response): Promise<void> {
+  const { secure, path } = req.session.cookie;
+  await new Promise<void>((resolve, reject) => req.session.destroy((error) => (error ? reject(error) : resolve())));
+  res.clearCookie(cookieName(Boolean(secure)), { path, httpOnly: true, sameSite: 'lax', secure: Boolean(secure) });
 }
