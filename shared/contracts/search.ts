@@ -11,20 +11,22 @@ export const SaidLine = z.object({
   pieces: z.array(z.object({ text: z.string(), marked: z.boolean() })),
 });
 
+export type SaidLine = z.infer<typeof SaidLine>;
+
 export const Finding = z.object({
   moment: Moment,
   /** why it was found */
   why: z.enum(['demo', 'substitution', 'movement', 'said']),
   said: SaidLine.nullable(),
+  /** of a substitution: why it serves, and how the dose changes */
+  note: z.string().nullable(),
 });
 export type Finding = z.infer<typeof Finding>;
 
 export const FindingGroup = z.object({
-  /** the movement that the moments show, or null for words that were said */
+  /** the movement that the moments show, or stand in for; null for words that were said */
   movement: NamedMovement.nullable(),
   heading: z.enum(['demos', 'insteadOf', 'said']),
-  /** for `insteadOf`: how the dose changes and why, in a sentence */
-  note: z.string().nullable(),
   /** whether the asker's kit is enough for the movement; null where no movement is asked for */
   inMyKit: z.boolean().nullable(),
   findings: z.array(Finding),
