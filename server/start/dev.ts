@@ -15,7 +15,8 @@ const quietMs = 150;
 
 try {
   const host = process.env.HOST || '127.0.0.1';
-  const frontPort = await choosePort(process.env.PORT, host);
+  const { port: frontPort, release } = await choosePort(process.env.PORT, host);
+  opening.onEnd(release);
   const webPort = await freePort();
   const house = await opening.open({
     entries: sourceEntries,

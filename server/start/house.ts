@@ -100,14 +100,19 @@ export class Opening {
     const signIns = await this.step('Preparing the database', say, () =>
       prepareData(entries.prepare, env, this.abort.signal),
     );
-    const run = (name: 'web' | 'worker') => {
+    const run = (name: 'web' | 'worker', onMessage?: () => void) => {
       const output = plan.mode === 'development' ? ('inherit' as const) : openLog(dataFolder, name);
-      return keepRunning({ name: `The ${name} process`, args: entries[name], env, output }, say);
+      const lastWords = () => (output === 'inherit' ? '' : ` It said last:\n${endOfLog(dataFolder, name, 8)}`);
+      const program = { name: `The ${name} process`, args: entries[name], env, output, lastWords };
+      return keepRunning({ ...program, ...(onMessage ? { onMessage } : {}) }, say);
     };
-    const web = run('web');
+    let listening = false;
+    const web = run('web', () => {
+      listening = true;
+    });
     const worker = run('worker');
     this.onEnd(() => Promise.all([web.stop(4000), worker.stop(4000)]));
-    await this.step('Starting the web process', say, () => this.untilHealthy(plan));
+    await this.step('Starting the web process', say, () => this.untilHealthy(plan, web, () => listening));
     const databaseUrl = env.DATABASE_URL ?? '';
     lock.describe({ url, mailPage });
     return { url, mailPage, databaseUrl, signIns, web, worker };
@@ -131,21 +136,24 @@ export class Opening {
     return result;
   }
 
-  private async untilHealthy({ host, webPort, dataFolder }: Plan) {
+  private async untilHealthy({ host, webPort, mode }: Plan, web: Supervised, isListening: () => boolean) {
     const address = host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
     const health = `http://${address.includes(':') ? `[${address}]` : address}:${webPort}/api/health`;
     const over = Date.now() + 60_000;
     while (!this.abort.signal.aborted) {
-      const answer = await fetch(health, { signal: AbortSignal.timeout(2000) }).catch(() => undefined);
-      if (answer?.ok) return;
-      if (Date.now() > over) {
-        throw new CannotStart(
-          `The web process does not answer at ${health}. It said last:\n${endOfLog(dataFolder, 'web')}`,
-        );
-      }
+      // its own word first: something else may answer at that address
+      if (isListening() && (await answers(health))) return;
+      // in development the next change may mend it
+      const hopeless = mode === 'production' && (web.failures >= 3 || Date.now() > over);
+      if (hopeless) throw new CannotStart(`The web process does not answer at ${health}.`);
       await pause(100);
     }
   }
+}
+
+async function answers(address: string) {
+  const answer = await fetch(address, { signal: AbortSignal.timeout(2000) }).catch(() => undefined);
+  return answer?.ok ?? false;
 }
 
 /** Waits for all even where one fails, so that nothing is still starting when the others are ended. */

@@ -13,7 +13,8 @@ const dataFolder = path.resolve(process.env.TAPELINE_DATA || 'storage/data');
 
 try {
   const host = process.env.HOST || '127.0.0.1';
-  const port = await choosePort(process.env.PORT, host);
+  const { port, release } = await choosePort(process.env.PORT, host);
+  opening.onEnd(release);
   const house = await opening.open({
     entries: builtEntries,
     dataFolder,

@@ -1,6 +1,12 @@
 import net from 'node:net';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
+import { CannotStart } from './cannotStart.mjs';
+import { livingOwnerOf, takeLock } from './lock.mjs';
 
 const loopback = '127.0.0.1';
+const firstPort = 4310;
+const portsTried = 100;
 
 /** A loopback port that was free a moment ago. */
 export function freePort(): Promise<number> {
@@ -25,19 +31,41 @@ export function isFree(port: number, host = loopback): Promise<boolean> {
   });
 }
 
+export type ChosenPort = { port: number; release(): void };
+
 /**
- * The port for the product: the wanted one, or without a wish 4310 and the ones after it.
- * @throws Error in plain words where the wanted one is taken
+ * The port for the product: the wanted one, or without a wish 4310 and the ones after it. It is spoken for until the end,
+ * so that two starts at the same moment never choose the same.
+ * @throws CannotStart in plain words where the wanted one is taken
  */
-export async function choosePort(wanted: string | undefined, host = loopback): Promise<number> {
+export async function choosePort(wanted: string | undefined, host = loopback): Promise<ChosenPort> {
   if (wanted !== undefined && wanted !== '') {
     const port = Number(wanted);
-    if (!Number.isInteger(port) || port < 0 || port > 65535)
-      throw new Error(`PORT is "${wanted}": a whole number up to 65535 is needed.`);
-    if (port === 0) return freePort();
-    if (await isFree(port, host)) return port;
-    throw new Error(`Port ${port} is taken. Choose another with PORT, or leave PORT away to take the next free one.`);
+    if (!Number.isInteger(port) || port < 0 || port > 65535) {
+      throw new CannotStart(`PORT is "${wanted}": a whole number up to 65535 is needed.`);
+    }
+    const chosen = port === 0 ? { port: await freePort(), release: () => {} } : await reserve(port, host);
+    if (chosen) return chosen;
+    throw new CannotStart(
+      `Port ${port} is taken. Choose another with PORT, or leave PORT away to take the next free one.`,
+    );
   }
-  for (let port = 4310; port < 4410; port++) if (await isFree(port, host)) return port;
-  return freePort();
+  for (let port = firstPort; port < firstPort + portsTried; port++) {
+    const chosen = await reserve(port, host);
+    if (chosen) return chosen;
+  }
+  return { port: await freePort(), release: () => {} };
+}
+
+/** Speaks for a port among all starts on this machine; undefined where somebody has it. */
+async function reserve(port: number, host: string): Promise<ChosenPort | undefined> {
+  const folder = path.join(tmpdir(), `tapeline-port-${port}`);
+  if (livingOwnerOf(folder) || !(await isFree(port, host))) return undefined;
+  try {
+    const taken = takeLock(folder);
+    return 'held' in taken ? { port, release: taken.held.release } : undefined;
+  } catch {
+    // left over by another user: nobody lives there, and it is not ours to remove
+    return { port, release: () => {} };
+  }
 }

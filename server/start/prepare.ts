@@ -15,4 +15,3 @@ if (process.env.DEMO_TEAM !== 'no') {
   await closeDatabase();
   store.close();
 }
-process.disconnect?.();

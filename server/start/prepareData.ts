@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process';
 import { z } from 'zod';
+import { CannotStart } from './cannotStart.mjs';
 
 const Prepared = z.object({
   seeded: z.boolean(),
@@ -23,7 +24,7 @@ export function prepareData(
     let signIns: SignIn[] = [];
     let said = '';
     const keep = (chunk: Buffer) => {
-      said = (said + chunk).slice(-8000);
+      said = (said + chunk).slice(0, 2000);
     };
     child.stdout?.on('data', keep);
     child.stderr?.on('data', keep);
@@ -33,7 +34,7 @@ export function prepareData(
     child.once('error', reject);
     child.once('close', (code, ended) => {
       if (code === 0) resolve(signIns);
-      else reject(new Error(`Preparing the database ended with ${ended ?? code}:\n${said}`));
+      else reject(new CannotStart(`Preparing the database ended with ${ended ?? code}:\n${said}`));
     });
   });
 }

@@ -10,9 +10,13 @@ export type Program = {
   /** an open file that takes what it says, or the terminal */
   output: number | 'inherit';
   onMessage?: (message: unknown) => void;
+  /** what it said last, shown when it ends unasked */
+  lastWords?: () => string;
 };
 
 export type Supervised = {
+  /** how often it ended unasked */
+  readonly failures: number;
   /** Ends it and starts it anew, as after a change of its source. */
   restart(): Promise<void>;
   /** Ends it in order, and with all that it started when that takes longer than this. */
@@ -26,6 +30,7 @@ export function keepRunning(program: Program, say: (line: string) => void): Supe
   let state: 'running' | 'stopping' = 'running';
   let child = start(program);
   let delayMs = backOff.firstMs;
+  let failures = 0;
   let startedAt = Date.now();
   const asked = new WeakSet<ChildProcess>();
 
@@ -35,7 +40,10 @@ export function keepRunning(program: Program, say: (line: string) => void): Supe
       killGroup(watched, 'SIGKILL');
       if (state === 'stopping' || asked.has(watched)) return;
       if (Date.now() - startedAt > backOff.forgetAfterMs) delayMs = backOff.firstMs;
-      say(`${program.name} ended (${signal ?? code}); it starts again in ${delayMs / 1000} s.`);
+      failures++;
+      say(
+        `${program.name} ended (${signal ?? code}); it starts again in ${delayMs / 1000} s.${program.lastWords?.() ?? ''}`,
+      );
       await pause(delayMs, undefined, { ref: true });
       delayMs = Math.min(delayMs * 2, backOff.longestMs);
       if (state === 'running' && child === watched) begin();
@@ -58,6 +66,9 @@ export function keepRunning(program: Program, say: (line: string) => void): Supe
   };
 
   return {
+    get failures() {
+      return failures;
+    },
     async restart() {
       const old = child;
       asked.add(old);

@@ -13,7 +13,11 @@ const listen = (port: number) =>
 
 it('honours PORT, and says so where it is taken', async () => {
   const port = await freePort();
-  expect(await choosePort(String(port))).toBe(port);
+  const chosen = await choosePort(String(port));
+  expect(chosen.port).toBe(port);
+  // spoken for, though nobody listens yet
+  await expect(choosePort(String(port))).rejects.toThrow(`Port ${port} is taken.`);
+  chosen.release();
   await listen(port);
   await expect(choosePort(String(port))).rejects.toThrow(`Port ${port} is taken.`);
 });
@@ -25,8 +29,9 @@ it('refuses a PORT that is no port', async () => {
 
 it('takes the next free one where no PORT is given', async () => {
   const first = await choosePort(undefined);
-  await listen(first);
   const second = await choosePort(undefined);
-  expect(second).toBeGreaterThan(first);
-  expect(await isFree(second)).toBe(true);
+  first.release();
+  second.release();
+  expect(second.port).toBeGreaterThan(first.port);
+  expect(await isFree(second.port)).toBe(true);
 });
