@@ -11,10 +11,7 @@ const on = 'border-ink bg-ink text-ground';
 export function Chip({ children, className }: { children: ReactNode; className?: string }) {
   return (
     <span
-      className={clsx(
-        'inline-flex items-center gap-1.5 rounded border-thin border-edge px-2 py-0.5 text-sm font-bold',
-        className,
-      )}
+      className={clsx('inline-flex items-center gap-1.5 rounded bg-raised px-2 py-0.5 text-sm font-bold', className)}
     >
       {children}
     </span>

@@ -36,7 +36,7 @@ export function ConfirmDialog({
       title={title}
       actions={
         <>
-          <Button autoFocus onClick={onClose}>
+          <Button data-first-focus onClick={onClose}>
             {cancel}
           </Button>
           <Button look="danger" busy={busy} onClick={onConfirm}>

@@ -1,4 +1,4 @@
-import { type ReactNode, useEffect, useId, useRef } from 'react';
+import { type ReactNode, useId, useLayoutEffect, useRef } from 'react';
 import { IconButton } from './IconButton';
 
 type Props = {
@@ -12,18 +12,28 @@ type Props = {
   actions?: ReactNode;
 };
 
-/** A window over the page, by the browser's own dialog: it keeps the focus inside and gives it back afterwards. */
-export function Dialog({ open, onClose, title, size = 'regular', children, actions }: Props) {
+/**
+ * A window over the page, by the browser's own dialog: it keeps the focus inside and gives it back afterwards.
+ * The focus starts on what has `data-first-focus`, else in the first field.
+ */
+export function Dialog({ open, ...rest }: Props) {
+  return open ? <OpenDialog {...rest} /> : null;
+}
+
+/** A component of its own, so that it is closed before it is taken out: else the focus would be lost. */
+function OpenDialog({ onClose, title, size = 'regular', children, actions }: Omit<Props, 'open'>) {
   const window = useRef<HTMLDialogElement>(null);
   const titleId = useId();
-  useEffect(() => {
+  useLayoutEffect(() => {
     const dialog = window.current;
-    if (!dialog || !open) return;
-    if (!dialog.open) dialog.showModal();
-    return () => dialog.close();
-  }, [open]);
+    dialog?.showModal();
+    const first =
+      dialog?.querySelector<HTMLElement>('[data-first-focus]') ??
+      dialog?.querySelector<HTMLElement>(':is(input, textarea, select):not(:disabled)');
+    first?.focus();
+    return () => dialog?.close();
+  }, []);
 
-  if (!open) return null;
   return (
     <dialog
       ref={window}
@@ -31,7 +41,7 @@ export function Dialog({ open, onClose, title, size = 'regular', children, actio
       data-size={size}
       aria-labelledby={titleId}
       onCancel={(event) => {
-        // an Escape inside a list of choices closes the list, not the window
+        // a file picker inside cancels too, and its event bubbles
         if (event.target !== event.currentTarget) return;
         event.preventDefault();
         onClose();

@@ -2,6 +2,7 @@ import { clsx } from 'clsx';
 import { type ReactNode, type RefObject, useEffect, useLayoutEffect, useRef } from 'react';
 import type { ChapterKind } from '../../shared/domain/words';
 import { usePlacement } from '../lib/placement';
+import { Icon } from './Icon';
 import { TapeStrip } from './TapeStrip';
 
 export type Option = {
@@ -57,6 +58,7 @@ export function OptionList({ id, label, anchor, options, active, chosen, note, o
           >
             {option.tape && <TapeStrip kind={option.tape} className="w-8" />}
             <span className="min-w-0 font-bold wrap-anywhere">{option.label}</span>
+            {option.value === chosen && <Icon name="check" size={16} />}
             {option.note && <span className="ms-auto max-w-1/2 text-end text-sm text-ink2">{option.note}</span>}
           </div>
         ))}

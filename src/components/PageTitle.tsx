@@ -19,7 +19,7 @@ export function PageTitle({ title, tab = title, meta, actions }: Props) {
     <header className="flex flex-wrap items-center gap-x-4 gap-y-2">
       <h1 className="text-xl font-black tracking-tight wrap-anywhere">{title}</h1>
       {meta && <div className="text-sm text-ink2">{meta}</div>}
-      {actions && <div className="ms-auto flex flex-wrap items-center gap-3">{actions}</div>}
+      {actions && <div className="flex flex-wrap items-center gap-3 sm:ms-auto">{actions}</div>}
     </header>
   );
 }

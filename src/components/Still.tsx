@@ -18,7 +18,12 @@ export function Still({ src, alt = '', length, className, loading = 'lazy' }: Pr
   const [brokenSrc, setBrokenSrc] = useState<string | null>(null);
   const usable = src && src !== brokenSrc;
   return (
-    <span className={clsx('relative block aspect-video flex-none overflow-hidden rounded-still bg-raised', className)}>
+    <span
+      className={clsx(
+        'relative block aspect-video self-start flex-none overflow-hidden rounded-still bg-raised',
+        className,
+      )}
+    >
       {usable ? (
         <img
           src={src}

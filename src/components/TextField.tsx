@@ -38,7 +38,7 @@ export function TextAreaField({
           rows={3}
           {...area}
           {...wiring}
-          className={clsx(inputLook, 'field-sizing-content block leading-normal')}
+          className={clsx(inputLook, 'field-sizing-content block min-h-22! leading-normal')}
         />
       )}
     </Field>

@@ -26,7 +26,7 @@ export function DeskLayout({ places, home, right, children }: Props) {
   return (
     <div className="flex min-h-dvh flex-col">
       <SkipLink />
-      <header className="flex flex-wrap items-center gap-x-4 border-b-thin border-line bg-surface px-4 md:flex-nowrap md:px-5">
+      <header className="flex flex-wrap items-center gap-x-2 border-b-thin border-line bg-surface px-4 md:flex-nowrap md:gap-x-4 md:px-[max(1.25rem,calc(50%-58.75rem))]">
         <Link to={home} className="flex min-h-13 items-center no-underline">
           <Wordmark />
         </Link>
@@ -41,7 +41,11 @@ export function DeskLayout({ places, home, right, children }: Props) {
           <Icon name={menu === 'open' ? 'close' : 'menu'} size={18} />
           Menu
         </Button>
-        {right && <div className="ms-auto flex min-w-0 items-center gap-1 text-sm md:order-last">{right}</div>}
+        {right && (
+          <div className="ms-auto flex min-w-0 flex-1 basis-0 items-center justify-end gap-1 text-sm md:order-last [&>*]:min-w-0">
+            {right}
+          </div>
+        )}
         <nav
           id="places"
           aria-label="Places"

@@ -33,7 +33,7 @@ export function FloorLayout({ places, home, search, right, phoneTop = 'mark', wi
       <SkipLink />
       <header
         className={clsx(
-          'flex min-h-13 items-center gap-x-5 px-4.5 pt-1 md:min-h-15 md:border-b-thin md:border-line md:px-6 md:pt-0',
+          'flex min-h-13 items-center gap-x-5 px-4.5 pt-1 md:min-h-15 md:border-b-thin md:border-line md:px-[max(1.5rem,calc(50%-54.5rem))] md:pt-0',
           phoneTop === 'none' && 'max-md:hidden',
         )}
       >
@@ -52,14 +52,14 @@ export function FloorLayout({ places, home, search, right, phoneTop = 'mark', wi
             ))}
           </ul>
         </nav>
-        {right && <div className="ms-auto flex min-w-0 items-center gap-2">{right}</div>}
+        {right && <div className="ms-auto flex min-w-0 items-center gap-2 [&>*]:min-w-0">{right}</div>}
       </header>
       <main
         ref={main}
         id="main"
         tabIndex={-1}
         className={clsx(
-          'mx-auto w-full grow px-4.5 pb-[calc(var(--nav)+1.5rem)] md:px-6 md:pt-5',
+          'mx-auto flex w-full grow flex-col px-4.5 pb-[calc(var(--nav)+1.5rem)] md:px-6 md:pt-5',
           width === 'column' ? 'max-w-3xl' : 'max-w-[112rem]',
         )}
       >

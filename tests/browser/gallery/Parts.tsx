@@ -232,7 +232,7 @@ export function Parts() {
         />
       </Section>
       <Section title="Cautions, waits, errors">
-        <div className="grid gap-5 lg:grid-cols-2">
+        <div className="grid items-start gap-5 lg:grid-cols-2">
           <Caution todo="Check what you hang from.">Pull on it with both hands first.</Caution>
           <ErrorPanel
             title="The sessions did not arrive."
@@ -244,7 +244,7 @@ export function Parts() {
           <Progress label="Making the playback version" share={null} />
           <Progress label="take-2.mov" share={0.3} state="failed" note="The connection broke off. Try again." />
           <Waiting label="Looking" />
-          <div className="flex gap-3">
+          <div className="flex flex-wrap gap-3">
             <Still length="0:48" className="w-37" />
             <Still src="/nothing.webp" alt="Box step-up" className="w-37" />
           </div>

@@ -10,7 +10,7 @@ import { SearchBox } from '../../../src/components/SearchBox';
 import { ThemeChoice } from '../../../src/components/ThemeChoice';
 import { ToastRegion } from '../../../src/components/ToastRegion';
 import { type ThemeChoice as Choice, chooseTheme } from '../../../src/lib/theme';
-import '../../../src/styles/index.css';
+import './gallery.css';
 import { FloorPage } from './FloorPage';
 import { Parts } from './Parts';
 import { SignInPage } from './SignInPage';
@@ -23,7 +23,7 @@ const person = (
   <Menu
     name="Quayside team, Ines: menu"
     label={
-      <span className="truncate">
+      <span className="min-w-0 truncate">
         <span className="max-sm:hidden">Quayside team · </span>
         <b className="text-ink">Ines</b>
       </span>
