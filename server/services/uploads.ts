@@ -41,7 +41,8 @@ export type AnnouncedFile = {
  */
 export async function createUpload(actor: Actor, file: AnnouncedFile): Promise<Upload> {
   requireVideoFile(file.fileName, file.contentType);
-  if (file.sizeBytes > limits.recordingBytes) throw new AppError('tooLarge');
+  if (file.sizeBytes > limits.recordingBytes)
+    throw new AppError('tooLarge', { fields: { sizeBytes: 'At most 8 GB a file.' } });
   const known = await uploadOfRequest(actor, file);
   if (known) return known;
   const session = await sessionFor(actor, file);
