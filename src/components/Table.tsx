@@ -94,9 +94,11 @@ function TableRow<Row>({
         );
         const inside = (
           <>
-            <span className="cell-name" aria-hidden="true">
-              {column.headShown === 'hidden' ? '' : column.head}
-            </span>
+            {column.headShown !== 'hidden' && (
+              <span className="cell-name" aria-hidden="true">
+                {column.head}
+              </span>
+            )}
             <span className="block min-w-0">{column.cell(row)}</span>
           </>
         );
