@@ -6,10 +6,12 @@ type BodyParserError = { type?: string; status?: number };
 /** What the platform's own parsers say, in our codes. */
 function known(error: unknown): AppError | null {
   if (error instanceof AppError) return error;
-  const { type } = (error ?? {}) as BodyParserError;
+  const { type, status } = (error ?? {}) as BodyParserError;
   if (type === 'entity.too.large') return new AppError('tooLarge');
   if (type === 'entity.parse.failed') return new AppError('invalid', { message: 'The request’s body is no JSON.' });
   if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('wrongType');
+  // a body that is shorter than announced, or packed and broken
+  if (type !== undefined && status === 400) return new AppError('invalid', { message: 'The request arrived broken.' });
   if (error instanceof URIError) return new AppError('notFound');
   // PostgreSQL's text holds no NUL
   if (databaseCode(error) === '22021') return new AppError('invalid', { message: 'Plain text only.' });
@@ -23,14 +25,10 @@ function databaseCode(error: unknown): string | undefined {
   return original?.code ?? code;
 }
 
-const goneCodes = new Set(['ECONNABORTED', 'ECONNRESET', 'ERR_STREAM_PREMATURE_CLOSE', 'EPIPE']);
-
 /** The one place where an error becomes an answer. */
 export const answerError: ErrorRequestHandler = (error, req, res, next) => {
-  const gone =
-    req.destroyed ||
-    goneCodes.has((error as { code?: string }).code ?? '') ||
-    (error as BodyParserError).type === 'request.aborted';
+  // not `req.destroyed`, which is also true of a request that was read to its end
+  const gone = req.socket.destroyed || (error as BodyParserError | null)?.type === 'request.aborted';
   if (gone && !(error instanceof AppError)) {
     // a client that went away is not an error
     res.destroy();
