@@ -7,26 +7,46 @@ export type PlaySnapshot = {
   state: PlayState;
   durationMs: number;
   rate: number;
-  /** what kept it from playing, in words */
+  /** 0 to 1 */
+  volume: number;
+  sound: 'on' | 'muted';
+  /** whether the frame of this time is there, or still on its way */
+  frame: 'shown' | 'awaited';
+  /** what keeps it from playing, in words */
   fault: string | null;
 };
 
-type Media = {
+/** What a player lets a playhead do. */
+export type Media = {
   currentMs(): number;
   seekTo(ms: number): void;
   play(): void;
   pause(): void;
   setRate(rate: number): void;
+  setSound(change: { volume?: number; sound?: 'on' | 'muted' }): void;
+  video(): HTMLVideoElement | null;
 };
+
+const isReady = ({ state }: PlaySnapshot) => state !== 'loading' && state !== 'broken';
 
 /**
  * The hand on a recording: pages hold one and give it to the player, lists and timelines read it and move it.
- * Seeking before the picture is there is remembered and done then.
+ * Seeking, playing and the speed are remembered while the picture is not there, and done when it comes.
  */
 export class Playhead {
   private media: Media | null = null;
   private wantedMs: number | null = null;
-  private snapshot: PlaySnapshot = { state: 'loading', durationMs: 0, rate: 1, fault: null };
+  private wants: 'play' | 'pause' = 'pause';
+  private wantedRate = 1;
+  private snapshot: PlaySnapshot = {
+    state: 'loading',
+    durationMs: 0,
+    rate: 1,
+    volume: 1,
+    sound: 'on',
+    frame: 'awaited',
+    fault: null,
+  };
   private readonly listeners = new Set<() => void>();
   private readonly timeListeners = new Set<() => void>();
 
@@ -40,26 +60,51 @@ export class Playhead {
   seekTo(ms: number): void {
     const { durationMs } = this.snapshot;
     const to = Math.max(0, durationMs > 0 ? Math.min(ms, durationMs) : ms);
-    if (this.media && this.snapshot.state !== 'loading') this.media.seekTo(to);
+    if (this.media && isReady(this.snapshot)) this.media.seekTo(to);
     else this.wantedMs = to;
     this.tick();
   }
 
   play(): void {
-    this.media?.play();
+    this.wants = 'play';
+    if (isReady(this.snapshot)) this.media?.play();
   }
 
   pause(): void {
+    this.wants = 'pause';
     this.media?.pause();
   }
 
+  /** Whether it plays, or would if the picture were there. */
+  isGoing(): boolean {
+    return isReady(this.snapshot)
+      ? this.snapshot.state === 'playing' || this.snapshot.state === 'waiting'
+      : this.wants === 'play';
+  }
+
   toggle(): void {
-    if (this.snapshot.state === 'playing' || this.snapshot.state === 'waiting') this.pause();
+    if (this.isGoing()) this.pause();
     else this.play();
   }
 
   setRate(rate: number): void {
-    this.media?.setRate(rate);
+    this.wantedRate = rate;
+    if (this.media) this.media.setRate(rate);
+    else this.report({ rate });
+  }
+
+  /** @param volume 0 to 1 */
+  setVolume(volume: number): void {
+    this.media?.setSound({ volume: Math.min(1, Math.max(0, volume)), sound: volume > 0 ? 'on' : 'muted' });
+  }
+
+  setSound(sound: 'on' | 'muted'): void {
+    this.media?.setSound({ sound });
+  }
+
+  /** The element that shows the picture, for what only it can do: a window of its own, a phone's full screen. */
+  video(): HTMLVideoElement | null {
+    return this.media?.video() ?? null;
   }
 
   subscribe = (listener: () => void): (() => void) => {
@@ -72,27 +117,36 @@ export class Playhead {
     return () => this.timeListeners.delete(listener);
   };
 
-  /** For the player alone: it can be moved from now on. */
+  /** For the player alone: it can be moved from now on. A player that goes leaves the place where it was. */
   attach(media: Media | null): void {
+    if (!media && this.media && isReady(this.snapshot)) this.wantedMs = this.media.currentMs();
     this.media = media;
-    if (!media) this.report({ state: 'loading' });
+    if (media) media.setRate(this.wantedRate);
+    else this.report({ state: 'loading', frame: 'awaited' });
   }
 
   /** For the player alone: what changed. */
   report(change: Partial<PlaySnapshot>): void {
     const was = this.snapshot;
-    this.snapshot = { ...was, ...change };
-    if (was.state === 'loading' && this.snapshot.state !== 'loading' && this.wantedMs !== null) {
-      const to = this.wantedMs;
-      this.wantedMs = null;
-      this.media?.seekTo(to);
-    }
+    const next = { ...was, ...change };
+    if ((Object.keys(next) as (keyof PlaySnapshot)[]).every((name) => next[name] === was[name])) return;
+    this.snapshot = next;
+    if (isReady(was) && !isReady(next))
+      this.wants = was.state === 'playing' || was.state === 'waiting' ? 'play' : 'pause';
+    if (!isReady(was) && isReady(next)) this.catchUp();
     for (const listener of this.listeners) listener();
   }
 
   /** For the player alone: the time moved. */
   tick(): void {
     for (const listener of this.timeListeners) listener();
+  }
+
+  private catchUp(): void {
+    const to = this.wantedMs;
+    this.wantedMs = null;
+    if (to !== null) this.media?.seekTo(to);
+    if (this.wants === 'play') this.media?.play();
   }
 }
 
