@@ -14,6 +14,7 @@ import { audit } from './audit';
 import { requestChapterPictures } from './chapterPictures';
 import { mediaUrl } from './context';
 import { contentOfVersion, type How, keepVersion, recordingOf, versionsOf } from './documents';
+import { followMerges } from './mergeMovements';
 import { refreshSearchOf } from './searchIndex';
 import { visibleRecordingOf } from './visibleRecording';
 
@@ -74,12 +75,13 @@ export function save(
   actor: Actor,
   recordingId: string,
   version: number,
-  chapters: Chapter[],
+  sent: Chapter[],
   how: How = 'edit',
   origin?: string,
 ): Promise<Chapters> {
   return inTransaction(async () => {
     const recording = await recordingOf(actor, recordingId);
+    const chapters = await withMergesFollowed(actor, sent);
     if (recording.durationMs === null)
       throw new AppError('notReady', {
         message: 'The recording’s length is not known yet. Mark its chapters in a moment.',
@@ -183,14 +185,28 @@ async function knownLinks(actor: Actor, recording: Recording, chapters: Chapter[
 }
 
 async function withoutLostLinks(actor: Actor, recording: Recording, chapters: Chapter[]): Promise<Chapter[]> {
-  const known = await knownLinks(actor, recording, chapters);
+  const followed = await withMergesFollowed(actor, chapters);
+  const known = await knownLinks(actor, recording, followed);
   const keep = (id: string | null) => (id && known.has(id) ? id : null);
-  return chapters.map((chapter) => ({
+  return followed.map((chapter) => ({
     ...chapter,
     blockId: keep(chapter.blockId),
     movementId: keep(chapter.movementId),
     standsInForMovementId: keep(chapter.standsInForMovementId),
     missingKitItemId: keep(chapter.missingKitItemId),
+  }));
+}
+
+/** A page that was open while a duplicate was merged still names it, and so does an earlier version. */
+async function withMergesFollowed(actor: Actor, chapters: Chapter[]): Promise<Chapter[]> {
+  const became = await followMerges(
+    actor.team.id,
+    chapters.flatMap(({ movementId, standsInForMovementId }) => [movementId, standsInForMovementId]),
+  );
+  return chapters.map((chapter) => ({
+    ...chapter,
+    movementId: became(chapter.movementId),
+    standsInForMovementId: became(chapter.standsInForMovementId),
   }));
 }
 

@@ -9,6 +9,7 @@ import { Recording } from '../models/recordings';
 import type { Actor } from './actor';
 import { audit } from './audit';
 import { contentOfVersion, type How, keepVersion, recordingOf, versionsOf } from './documents';
+import { followMerges } from './mergeMovements';
 import { refreshSearchOf } from './searchIndex';
 
 export async function read(actor: Actor, recordingId: string): Promise<Cues> {
@@ -35,12 +36,13 @@ export function save(
   actor: Actor,
   recordingId: string,
   version: number,
-  cues: Cue[],
+  sent: Cue[],
   how: How = 'edit',
   origin?: string,
 ): Promise<Cues> {
   return inTransaction(async () => {
     const recording = await recordingOf(actor, recordingId);
+    const cues = await withMergesFollowed(actor, sent);
     const inOrder = cues.toSorted((a, b) => a.atMs - b.atMs);
     await refuseFaulty(actor, recording, cues);
     const [count] = await Recording.update(
@@ -72,7 +74,10 @@ export function save(
 
 export function restore(actor: Actor, recordingId: string, wanted: number, version: number): Promise<Cues> {
   return inTransaction(async () => {
-    const kept = z.array(Cue).parse(await contentOfVersion(actor, recordingId, 'cues', wanted));
+    const kept = await withMergesFollowed(
+      actor,
+      z.array(Cue).parse(await contentOfVersion(actor, recordingId, 'cues', wanted)),
+    );
     const known = await knownMovements(actor, kept);
     const cues = kept.map((cue) => ({
       ...cue,
@@ -84,6 +89,15 @@ export function restore(actor: Actor, recordingId: string, wanted: number, versi
 
 export function versions(actor: Actor, recordingId: string) {
   return versionsOf<Cue>(actor, recordingId, 'cues', (cue) => cue.id);
+}
+
+/** A page that was open while a duplicate was merged still names it, and so does an earlier version. */
+async function withMergesFollowed(actor: Actor, cues: Cue[]): Promise<Cue[]> {
+  const became = await followMerges(
+    actor.team.id,
+    cues.map(({ movementId }) => movementId),
+  );
+  return cues.map((cue) => ({ ...cue, movementId: became(cue.movementId) }));
 }
 
 async function refuseFaulty(actor: Actor, recording: Recording, cues: Cue[]): Promise<void> {

@@ -5,7 +5,7 @@ import type * as contract from '../../shared/contracts/movements';
 import { setMovementPicture } from '../../shared/contracts/movements';
 import { AppError } from '../../shared/errors';
 import { madeKey } from '../../storage/keys';
-import { afterCommit, inTransaction } from '../models/database';
+import { afterCommit, currentTransaction, inTransaction } from '../models/database';
 import { Movement } from '../models/dictionary';
 import type { Actor } from './actor';
 import { audit } from './audit';
@@ -44,7 +44,13 @@ export function removePicture(actor: Actor, movementId: string): Promise<contrac
 
 async function change(actor: Actor, movementId: string, name: string | null): Promise<contract.Movement> {
   // holds the row: of two pictures at once the first is seen, and removed, by the second
-  await Movement.update({ updatedAt: new Date() } as never, { where: { id: movementId, teamId: actor.team.id } });
+  const transaction = currentTransaction();
+  if (transaction)
+    await Movement.findOne({
+      where: { id: movementId, teamId: actor.team.id },
+      attributes: ['id'],
+      lock: transaction.LOCK.UPDATE,
+    });
   const movement = await movementOf(actor, movementId);
   const before = movement.pictureName;
   if (before === name) return present(movement);
