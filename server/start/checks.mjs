@@ -27,12 +27,14 @@ export async function suites(paths, reports) {
   const reporting = ['--reporter=default', '--reporter=json', `--outputFile.json=${file}`];
   const code = await run(['node_modules/vitest/vitest.mjs', 'run', ...reporting, ...paths], { NODE_ENV: 'test' });
   const report = read(file);
-  // a file that cannot be loaded fails without a single failed test
-  const broken = (report?.testResults ?? []).filter(
-    (/** @type {{ status: string, assertionResults: unknown[] }} */ result) =>
-      result.status === 'failed' && result.assertionResults.length === 0,
-  );
+  // a file that cannot be loaded, or a suite whose setting up failed, has no failed test of its own
+  const broken = (report?.testResults ?? []).filter(hasNoFailedTest);
   return honest(code, report?.numPassedTests ?? 0, (report?.numFailedTests ?? 0) + broken.length);
+}
+
+/** @param {{ status: string, assertionResults: { status: string }[] }} file */
+function hasNoFailedTest({ status, assertionResults }) {
+  return status === 'failed' && !assertionResults.some((test) => test.status === 'failed');
 }
 
 /**
