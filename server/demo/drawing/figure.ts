@@ -115,7 +115,7 @@ function drawHead(g: SKRSContext2D, joints: Joints, dress: Dress) {
       g,
       [
         [body.head - 0.5, -0.5],
-        [body.head + 2.5, -2],
+        [body.head + 1.2, -1.6],
       ],
       4,
       dress.skin,

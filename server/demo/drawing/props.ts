@@ -202,7 +202,8 @@ export function drawProp(g: SKRSContext2D, prop: Prop) {
       g.beginPath();
       g.arc(0, -5, 7, 0, 7);
       g.stroke();
-      disc(g, [0, -17], 11.5, '#37424a');
+      disc(g, [0, -17], 12.5, '#aeb7ba');
+      disc(g, [0, -17], 11, '#37424a');
       disc(g, [0, -17], 4, '#d9573f');
       return g.restore();
     }

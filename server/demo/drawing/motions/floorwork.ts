@@ -1,7 +1,7 @@
 import { bySlope, fromTheSide } from '../motion';
 import type { Prop } from '../props';
 import type { SidePose } from '../sidePose';
-import { at, bothHands, straightFrom, swung } from './stances';
+import { at, bothHands, straightFrom } from './stances';
 
 const low = { zoom: 1.3, floorAt: 226 } as const;
 const mat = (left: number, width: number): Prop => ({ layer: 'behind', thing: 'mat', left, width });
@@ -20,7 +20,7 @@ export const pushUp = bySlope(
     ...straightFrom(pushUpFeet, degrees),
     look: 66 - degrees,
     hands: bothHands(at(48, 4)),
-    feet: [pushUpFeet, [-84, 14]],
+    feet: [pushUpFeet, pushUpFeet],
     ...onToes,
   }),
   { ...low, props: () => [mat(-100, 180)] },
@@ -39,7 +39,7 @@ export const chairPushUp = bySlope(
     ...straightFrom(raisedFeet, degrees),
     look: 66 - degrees,
     hands: bothHands(at(33, 49)),
-    feet: [raisedFeet, [-96, 14]],
+    feet: [raisedFeet, raisedFeet],
     ...onToes,
   }),
   { zoom: 1.2, floorAt: 234, props: () => [{ layer: 'behind', thing: 'chair', left: 22 }] },
@@ -227,7 +227,7 @@ export const birdDog = fromTheSide(
 );
 
 const sitBack: SidePose = {
-  hip: [-44, 24],
+  hip: [-44, 27],
   lean: 96,
   look: 100,
   hands: bothHands(at(62, 6)),
@@ -249,65 +249,25 @@ export const kneelingReach = fromTheSide(
   { ...low, props: () => [mat(-90, 180)] },
 );
 
-/** Lying face down, elbows drawn back beside the ribs and held. */
+const faceDown: SidePose = {
+  hip: [-10, 10],
+  lean: 89,
+  look: 84,
+  hands: bothHands(at(-12, 9)),
+  feet: [
+    [-94, 9],
+    [-97, 9],
+  ],
+  toes: [168, 168],
+};
+
+/** Lying face down, the elbows drawn up and back beside the ribs and held. */
 export const proneRowHold = fromTheSide(
   [
-    [
-      0.8,
-      {
-        hip: [-10, 10],
-        lean: 90,
-        look: 82,
-        hands: bothHands(swung(86, 0.99)),
-        feet: [
-          [-94, 9],
-          [-97, 9],
-        ],
-        toes: [168, 168],
-      },
-    ],
-    [
-      0.2,
-      {
-        hip: [-10, 10],
-        lean: 90,
-        look: 82,
-        hands: bothHands(swung(86, 0.99)),
-        feet: [
-          [-94, 9],
-          [-97, 9],
-        ],
-        toes: [168, 168],
-      },
-    ],
-    [
-      0.8,
-      {
-        hip: [-10, 10],
-        lean: 80,
-        look: 74,
-        hands: bothHands(at(32, 28)),
-        feet: [
-          [-94, 9],
-          [-97, 9],
-        ],
-        toes: [168, 168],
-      },
-    ],
-    [
-      2.2,
-      {
-        hip: [-10, 10],
-        lean: 79,
-        look: 74,
-        hands: bothHands(at(32, 29)),
-        feet: [
-          [-94, 9],
-          [-97, 9],
-        ],
-        toes: [168, 168],
-      },
-    ],
+    [0.8, faceDown],
+    [0.3, faceDown],
+    [0.9, { ...faceDown, lean: 80, look: 76, hands: bothHands(at(16, 16)) }],
+    [2.2, { ...faceDown, lean: 79, look: 76, hands: bothHands(at(15, 17)) }],
   ],
   { ...low, props: () => [mat(-112, 210)] },
 );

@@ -68,23 +68,13 @@ export const bentOverRow = fromTheSide(
   },
 );
 
-export const suitcaseDeadlift = fromTheSide(
-  [
-    [1.3, { ...standing, hands: [swung(4), swung(4)] }],
-    [0.4, { ...standing, hands: [swung(4), swung(4)] }],
-    [1.6, { ...standing, hip: [-26, 54], lean: 52, look: 26, hands: [swung(-6), swung(-6)] }],
-    [0.3, { ...standing, hip: [-26, 54], lean: 52, look: 26, hands: [swung(-6), swung(-6)] }],
-  ],
-  { props: (joints) => [{ layer: 'near', thing: 'kettlebell', at: joints.arms[0].end, hangs: 0 }] },
-);
-
 const toLeg: SidePose = {
   ...standing,
   hip: [-14, 88],
   lean: 14,
   hands: bothHands(held(18, -38)),
   feet: [
-    [56, 32],
+    [51, 32],
     [-14, 6],
   ],
   toes: [-62, 0],
@@ -94,10 +84,10 @@ export const hamstringStretch = fromTheSide(
   [
     [1.6, toLeg],
     [0.3, toLeg],
-    [2.0, { ...toLeg, hip: [-18, 87], lean: 54, look: 40, hands: bothHands({ at: [24, 64] }) }],
-    [1.6, { ...toLeg, hip: [-18, 87], lean: 55, look: 40, hands: bothHands({ at: [24, 63] }) }],
+    [2.0, { ...toLeg, hip: [-14, 86.5], lean: 54, look: 40, hands: bothHands({ at: [26, 62] }) }],
+    [1.6, { ...toLeg, hip: [-14, 86.5], lean: 55, look: 40, hands: bothHands({ at: [26, 61] }) }],
   ],
-  { props: () => [{ layer: 'behind', thing: 'box', left: 46, width: 40, height: 25 }] },
+  { props: () => [{ layer: 'behind', thing: 'box', left: 41, width: 42, height: 25 }] },
 );
 
 export const calfStretch = fromTheSide(

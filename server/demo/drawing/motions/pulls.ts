@@ -14,15 +14,15 @@ function leaningBack(ankle: readonly [number, number], degrees: number, hand: re
     lean: mirrored.lean,
     look: mirrored.lean + 6,
     hands: bothHands(at(...hand)),
-    feet: [ankle, [ankle[0] + 4, ankle[1]]] as const,
+    feet: [ankle, ankle] as const,
     toes: [toes, toes] as const,
   };
 }
 
 export const ringRow = bySlope(
   [
-    [1.2, 43],
-    [0.3, 43],
+    [1.2, 43.9],
+    [0.3, 43.9],
     [0.9, 61],
     [0.5, 61],
   ],
@@ -32,8 +32,8 @@ export const ringRow = bySlope(
 
 export const towelRow = bySlope(
   [
-    [1.2, 55],
-    [0.3, 55],
+    [1.2, 55.5],
+    [0.3, 55.5],
     [0.9, 73],
     [0.6, 73],
   ],

@@ -1,5 +1,5 @@
 import type { DemoSession } from '../shapes';
-import { easier, kilos, line, perSide, reps, secondsPerSide, without } from '../shorthand';
+import { easier, kilos, line, perSide, reps, seconds, secondsPerSide, without } from '../shorthand';
 import { wilma } from '../voices';
 
 export const oneLegOnePress: DemoSession = {
@@ -18,7 +18,7 @@ export const oneLegOnePress: DemoSession = {
       title: 'Steady the middle',
       scheme: { type: 'sets', sets: 2, restSeconds: null },
       note: '',
-      lines: [line('bird-dog', perSide(6)), line('side-bend', secondsPerSide(20))],
+      lines: [line('bird-dog', perSide(6)), line('prone-row-hold', seconds(20)), line('side-bend', secondsPerSide(20))],
     },
     {
       slug: 'workout',
@@ -43,7 +43,7 @@ export const oneLegOnePress: DemoSession = {
       title: 'Open the hip',
       scheme: { type: 'holds', rounds: 1 },
       note: '',
-      lines: [line('hip-flexor-stretch', secondsPerSide(75)), line('kneeling-reach', { ...reps(60), unit: 'seconds' })],
+      lines: [line('hip-flexor-stretch', secondsPerSide(75)), line('kneeling-reach', seconds(60))],
     },
   ],
   recording: {
@@ -77,6 +77,21 @@ export const oneLegOnePress: DemoSession = {
               text: 'Reach long, not high. A cup of tea stands on your back.',
               cue: { kind: 'go', text: 'Reach long, not high' },
               thenMs: 3400,
+            },
+          ],
+        },
+        {
+          kind: 'activation',
+          title: 'Prone row hold',
+          block: 'activation',
+          movement: 'prone-row-hold',
+          motion: 'proneRowHold',
+          says: [
+            'Face down, forehead just off the floor.',
+            {
+              text: 'Draw the elbows up and back, squeeze, and keep breathing.',
+              cue: { kind: 'go', text: 'Elbows back, squeeze, breathe' },
+              thenMs: 2600,
             },
           ],
         },
