@@ -3,26 +3,38 @@ import { DeskRoom } from './DeskRoom';
 import { FloorRoom } from './FloorRoom';
 import { Home } from './Home';
 import { PageFault } from './PageFault';
+import { PlainRoom } from './PlainRoom';
 import { SignedIn } from './SignedIn';
 import { TeamRoom } from './TeamRoom';
 
 /** Every address of the client; a page's code is fetched when it is first opened. */
 const pages: RouteObject[] = [
-  { path: 'sign-in', lazy: async () => ({ Component: (await import('../pages/SignInPage')).SignInPage }) },
-  { path: 'join', lazy: async () => ({ Component: (await import('../pages/JoinPage')).JoinPage }) },
   {
-    path: 'forgot-password',
-    lazy: async () => ({ Component: (await import('../pages/ForgotPasswordPage')).ForgotPasswordPage }),
-  },
-  {
-    path: 'new-password',
-    lazy: async () => ({ Component: (await import('../pages/NewPasswordPage')).NewPasswordPage }),
+    element: <PlainRoom />,
+    children: [
+      { path: 'sign-in', lazy: async () => ({ Component: (await import('../pages/SignInPage')).SignInPage }) },
+      { path: 'join', lazy: async () => ({ Component: (await import('../pages/JoinPage')).JoinPage }) },
+      {
+        path: 'forgot-password',
+        lazy: async () => ({ Component: (await import('../pages/ForgotPasswordPage')).ForgotPasswordPage }),
+      },
+      {
+        path: 'new-password',
+        lazy: async () => ({ Component: (await import('../pages/NewPasswordPage')).NewPasswordPage }),
+      },
+      { path: '*', lazy: async () => ({ Component: (await import('../pages/NotFoundPage')).NotFoundPage }) },
+    ],
   },
   {
     element: <SignedIn />,
     children: [
       { index: true, element: <Home /> },
-      { path: 'account', lazy: async () => ({ Component: (await import('../pages/AccountPage')).AccountPage }) },
+      {
+        element: <PlainRoom />,
+        children: [
+          { path: 'account', lazy: async () => ({ Component: (await import('../pages/AccountPage')).AccountPage }) },
+        ],
+      },
       {
         path: 't/:team',
         element: <TeamRoom />,
@@ -102,7 +114,6 @@ const pages: RouteObject[] = [
       },
     ],
   },
-  { path: '*', lazy: async () => ({ Component: (await import('../pages/NotFoundPage')).NotFoundPage }) },
 ];
 
 export const router = createBrowserRouter([{ errorElement: <PageFault />, children: pages }]);
