@@ -11,8 +11,9 @@ export function showCaptions(player: Player, url: string | null | undefined, sta
   const isSame = there !== undefined && new URL(there.src, location.href).href === wanted;
   // video.js's types know the list of these elements, not what an element holds
   if (there && !isSame) player.removeRemoteTextTrack(there.track as never);
+  // cleaned up by hand: else the track would go with the next address of the picture
   if (wanted && !isSame)
-    player.addRemoteTextTrack({ kind: 'captions', srclang: 'en', label: 'English', src: wanted }, false);
+    player.addRemoteTextTrack({ kind: 'captions', srclang: 'en', label: 'English', src: wanted }, true);
   const shown = trackOf(player);
   if (shown) shown.track.mode = state === 'shown' ? 'showing' : 'hidden';
 }

@@ -22,6 +22,7 @@ export const icons = {
   filter: <path d="M3 5h18l-7 8v7l-4-2.5V13z" />,
   floor: <path d="M2 19.5h20M6 15.5h12M8.5 11.5h7" />,
   full: <path d="M4 9.5V4h5.5M14.5 4H20v5.5M20 14.5V20h-5.5M9.5 20H4v-5.5" />,
+  fullOff: <path d="M9.5 4v5.5H4M20 9.5h-5.5V4M14.5 20v-5.5H20M4 14.5h5.5V20" />,
   join: <path d="M3 12h6M15 12h6M6 8.5L9.5 12 6 15.5M18 8.5L14.5 12 18 15.5M12 4v16" />,
   key: <path d="M7.5 8a4 4 0 1 0 .01 0zM11.5 12H21v4M16.5 12v3" />,
   kit: <path d="M2 9.5v5M5.5 6.5v11M18.5 6.5v11M22 9.5v5M5.5 12h13" />,
@@ -34,6 +35,7 @@ export const icons = {
   mirror: <path d="M12 3v18M9 7v10H3zM15 7v10h6z" />,
   moon: <path d="M19.5 14.5A8.5 8.5 0 0 1 9.5 4.5a8.5 8.5 0 1 0 10 10z" />,
   more: <path d="M4 10.8h2.4v2.4H4zM10.8 10.8h2.4v2.4h-2.4zM17.6 10.8H20v2.4h-2.4z" />,
+  mute: <path d="M4 9.5h4L13 5v14l-5-4.5H4zM16.5 9.5l5 5M21.5 9.5l-5 5" />,
   next: <path d="M5 4.5v15l10-7.5zM19 4v16" />,
   pause: <path d="M8 4v16M16 4v16" strokeWidth="4" />,
   people: (
@@ -56,6 +58,7 @@ export const icons = {
   undo: <path d="M4 9.5h11a5 5 0 0 1 0 10H9M8.5 5L4 9.5 8.5 14" />,
   upload: <path d="M12 16V4M6.5 9L12 3.5 17.5 9M4 20.5h16" />,
   warning: <path d="M12 3.5l9.5 17h-19zM12 10v5M12 16.8v1.7" />,
+  window: <path d="M21 10V5H3v14h7M12.5 13H21v6h-8.5z" />,
 } as const satisfies Record<string, ReactNode>;
 
 export type IconName = keyof typeof icons;

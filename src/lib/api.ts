@@ -22,7 +22,11 @@ export class ApiError extends Error {
   }
 }
 
-type Options = { signal?: AbortSignal };
+type Options = {
+  signal?: AbortSignal;
+  /** `kept` for a request that goes on when the page is left */
+  afterPage?: 'dropped' | 'kept';
+};
 
 /**
  * Calls a declared operation. Path parameters are taken out of the input; the rest goes into the query of a GET or DELETE,
@@ -32,12 +36,12 @@ type Options = { signal?: AbortSignal };
 export async function call<E extends Endpoint>(
   endpoint: E,
   input: Input<E>,
-  { signal }: Options = {},
+  options: Options = {},
 ): Promise<Output<E>> {
   const { path, rest } = fill(endpoint.path, input as Record<string, unknown>);
   const inQuery = endpoint.method === 'get' || endpoint.method === 'delete';
   const query = inQuery ? queryOf(rest) : '';
-  return send(endpoint, path + query, inQuery ? undefined : JSON.stringify(rest), signal);
+  return send(endpoint, path + query, inQuery ? undefined : JSON.stringify(rest), options);
 }
 
 /** Calls an operation that takes a file; the input's other fields go beside it. @throws ApiError */
@@ -45,13 +49,13 @@ export async function callWithFile<E extends Endpoint>(
   endpoint: E,
   input: Input<E>,
   file: File,
-  { signal }: Options = {},
+  options: Options = {},
 ): Promise<Output<E>> {
   const { path, rest } = fill(endpoint.path, input as Record<string, unknown>);
   const form = new FormData();
   for (const [name, value] of Object.entries(rest)) form.append(name, String(value));
   form.append('file', file, file.name);
-  return send(endpoint, path, form, signal);
+  return send(endpoint, path, form, options);
 }
 
 /** The address of an operation that a browser opens by itself: a download, a track, a stream. */
@@ -64,13 +68,14 @@ async function send<E extends Endpoint>(
   endpoint: E,
   path: string,
   body: string | FormData | undefined,
-  signal?: AbortSignal,
+  { signal, afterPage = 'dropped' }: Options,
 ): Promise<Output<E>> {
   let response: Response;
   try {
     response = await fetch(`/api${path}`, {
       method: endpoint.method.toUpperCase(),
       credentials: 'same-origin',
+      keepalive: afterPage === 'kept',
       headers: typeof body === 'string' ? { 'Content-Type': 'application/json' } : {},
       ...(body === undefined ? {} : { body }),
       ...(signal ? { signal } : {}),
