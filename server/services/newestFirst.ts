@@ -1,4 +1,4 @@
-import { literal, type Model, type ModelStatic, type WhereOptions } from 'sequelize';
+import { literal, type Model, type ModelStatic, Op, type WhereOptions } from 'sequelize';
 import { z } from 'zod';
 import { AppError } from '../../shared/errors';
 import { database } from '../models/database';
@@ -18,7 +18,7 @@ export async function newestFirst<M extends Model & { id: string }>(
   const madeAt = `"${model.name}"."created_at"`;
   const rows = await model.findAll({
     attributes: { include: [[literal(`${madeAt}::text`), 'madeAt']] },
-    where: { ...where, ...(cursor ? before(cursor, madeAt, model.name) : {}) } as WhereOptions,
+    where: { ...where, [Op.and]: cursor ? [before(cursor, madeAt, model.name)] : [] } as WhereOptions,
     order: [
       ['createdAt', 'DESC'],
       ['id', 'DESC'],
@@ -33,5 +33,5 @@ function before(cursor: string, madeAt: string, name: string) {
   if (!place.success)
     throw new AppError('invalid', { fields: { cursor: 'This list changed. Start at its beginning.' } });
   const [time, id] = place.data.map((part) => database().escape(part));
-  return { place: literal(`(${madeAt}, "${name}"."id") < (${time}::timestamptz, ${id}::uuid)`) };
+  return literal(`(${madeAt}, "${name}"."id") < (${time}::timestamptz, ${id}::uuid)`);
 }

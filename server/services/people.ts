@@ -1,8 +1,8 @@
-import { col, fn, Op, where } from 'sequelize';
+import { col, fn, literal, Op } from 'sequelize';
 import { z } from 'zod';
 import type { Role } from '../../shared/domain/words';
 import { AppError } from '../../shared/errors';
-import { inTransaction } from '../models/database';
+import { database, inTransaction } from '../models/database';
 import { Membership, Person, Team } from '../models/people';
 import { type Actor, requireMay } from './actor';
 import { audit } from './audit';
@@ -16,7 +16,7 @@ export type TeamPerson = { person: Person; role: Role; since: Date };
 export async function listPeople(actor: Actor, { cursor, limit }: PageAsked) {
   requireMay(actor, 'managePeople');
   const memberships = await Membership.findAll({
-    where: { teamId: actor.team.id, ...(cursor ? { after: afterPerson(cursor) } : {}) },
+    where: { teamId: actor.team.id, [Op.and]: cursor ? [afterPerson(cursor)] : [] },
     include: [{ model: Person, as: 'person', required: true }],
     order: [
       [fn('lower', col('person.name')), 'ASC'],
@@ -33,14 +33,8 @@ function afterPerson(cursor: string) {
   const place = Place.safeParse(readCursor(cursor, 2));
   if (!place.success)
     throw new AppError('invalid', { fields: { cursor: 'This list changed. Start at its beginning.' } });
-  const [name, id] = place.data;
-  const lowerName = fn('lower', col('person.name'));
-  return {
-    [Op.or]: [
-      where(lowerName, Op.gt, fn('lower', name)),
-      { [Op.and]: [where(lowerName, Op.eq, fn('lower', name)), { personId: { [Op.gt]: id } }] },
-    ],
-  };
+  const [name, id] = place.data.map((part) => database().escape(part));
+  return literal(`(lower("person"."name"), "Membership"."person_id") > (lower(${name}), ${id}::uuid)`);
 }
 
 /**
