@@ -53,6 +53,24 @@ function disc(g: SKRSContext2D, [x, y]: Point, radius: number, fill: string) {
 }
 
 function drawBoard(g: SKRSContext2D) {
+  path(
+    g,
+    [
+      [66, 100],
+      [58, -3],
+    ],
+    4,
+    '#7c6a4d',
+  );
+  path(
+    g,
+    [
+      [116, 100],
+      [124, -3],
+    ],
+    4,
+    '#7c6a4d',
+  );
   slab(g, 52, 98, 78, 54, '#fbfaf4', '#7c6a4d');
   for (const [i, width] of [46, 58, 38, 52].entries()) {
     path(

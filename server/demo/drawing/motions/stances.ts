@@ -1,4 +1,5 @@
 import type { Point } from '../body';
+import type { FrontPose } from '../frontPose';
 import type { Hand, SidePose } from '../sidePose';
 
 /** Poses that many movements start from. */
@@ -20,6 +21,20 @@ export const standing: SidePose = {
   hands: bothHands(hanging),
   feet: flatFeet,
   toes: [0, 0],
+};
+
+/** Standing towards the camera. */
+export const facing: FrontPose = {
+  hip: [0, 90],
+  lean: 0,
+  hands: [
+    [-27, 90],
+    [27, 90],
+  ],
+  feet: [
+    [-13, 6],
+    [13, 6],
+  ],
 };
 
 /** A straight body that turns about the ankles; degrees above the floor, head to the right. */
