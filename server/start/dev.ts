@@ -1,3 +1,5 @@
+import { once } from 'node:events';
+import { createServer as createHttpServer } from 'node:http';
 import path from 'node:path';
 import { createServer } from 'vite';
 import { giveUp } from './cannotStart.mjs';
@@ -29,9 +31,17 @@ try {
   });
   // vite.config.ts sends what is not the client's there
   process.env.API_URL = `http://127.0.0.1:${webPort}`;
-  const vite = await createServer({ server: { host, port: frontPort, strictPort: true } });
-  opening.onEnd(() => vite.close());
-  await vite.listen();
+  // on a server of our own: Vite's would end this process at SIGTERM before everything else is ended
+  const front = createHttpServer();
+  const vite = await createServer({ server: { middlewareMode: true, hmr: { server: front } }, appType: 'spa' });
+  front.on('request', vite.middlewares);
+  opening.onEnd(() => {
+    front.close();
+    front.closeAllConnections();
+    return vite.close();
+  });
+  front.listen(frontPort, host);
+  await once(front, 'listening');
 
   const data = path.resolve('storage/data');
   vite.watcher.add(watched);

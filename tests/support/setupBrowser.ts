@@ -62,3 +62,6 @@ async function untilReady(launcher: ReturnType<typeof fork>, logFile: string): P
   ]);
   return Ready.parse(message);
 }
+
+// biome-ignore lint/style/noDefaultExport: Playwright's globalSetup takes a file's default
+export default setupBrowser;

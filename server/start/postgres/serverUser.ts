@@ -1,23 +1,19 @@
 import { spawnSync } from 'node:child_process';
 import { readFileSync } from 'node:fs';
-import { userInfo } from 'node:os';
 
-export type ServerUser = { name: string; uid: number; gid: number };
+export type ServerUser = { uid: number; gid: number };
 
 const iAmRoot = () => process.getuid?.() === 0;
 
 /** Whom the database server runs as: PostgreSQL refuses root, so root hands it to the package's own user. */
 export function serverUser(): ServerUser {
-  if (!iAmRoot()) {
-    const { username, uid, gid } = userInfo();
-    return { name: username, uid, gid };
-  }
+  if (!iAmRoot()) return { uid: process.getuid?.() ?? -1, gid: process.getgid?.() ?? -1 };
   const line = readFileSync('/etc/passwd', 'utf8')
     .split('\n')
     .map((entry) => entry.split(':'))
     .find(([name]) => name === 'postgres');
   if (!line) throw new Error('There is no system user "postgres": install the Debian package postgresql.');
-  return { name: 'postgres', uid: Number(line[2]), gid: Number(line[3]) };
+  return { uid: Number(line[2]), gid: Number(line[3]) };
 }
 
 /** What to add to a spawn so that it runs as this user; only root can change. */
