@@ -10,9 +10,9 @@ function known(error: unknown): AppError | null {
   if (type === 'entity.too.large') return new AppError('tooLarge');
   if (type === 'entity.parse.failed') return new AppError('invalid', { message: 'The request’s body is no JSON.' });
   if (type === 'encoding.unsupported' || type === 'charset.unsupported') return new AppError('wrongType');
-  // a body that is shorter than announced, or packed and broken
-  if (type !== undefined && status === 400) return new AppError('invalid', { message: 'The request arrived broken.' });
   if (error instanceof URIError) return new AppError('notFound');
+  // a body that is shorter than announced, or packed and broken
+  if (status === 400) return new AppError('invalid', { message: 'The request arrived broken.' });
   // PostgreSQL's text holds no NUL
   if (databaseCode(error) === '22021') return new AppError('invalid', { message: 'Plain text only.' });
   if (databaseCode(error) === '22P02') return new AppError('notFound');
