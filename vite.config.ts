@@ -10,6 +10,8 @@ export default defineConfig({
   server: {
     host: '127.0.0.1',
     // the Host header stays as the browser sent it, so that the server's same-origin check sees one origin
+    // what the running product writes is no source
+    watch: { ignored: ['**/storage/data/**', '**/dist/**'] },
     proxy: { '/api': { target: api }, '/m': { target: api } },
   },
   build: {

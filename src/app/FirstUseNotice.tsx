@@ -21,7 +21,7 @@ export function FirstUseNotice() {
       open={state === 'open'}
       onClose={() => setState('later')}
       actions={
-        <GoButton busy={read.isPending ? 'One moment' : undefined} onClick={() => read.mutate()}>
+        <GoButton data-first-focus busy={read.isPending ? 'One moment' : undefined} onClick={() => read.mutate()}>
           I have read this
         </GoButton>
       }

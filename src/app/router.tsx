@@ -1,4 +1,5 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
+import { Waiting } from '../components/Waiting';
 import { DeskRoom } from './DeskRoom';
 import { FloorRoom } from './FloorRoom';
 import { Home } from './Home';
@@ -116,4 +117,6 @@ const pages: RouteObject[] = [
   },
 ];
 
-export const router = createBrowserRouter([{ errorElement: <PageFault />, children: pages }]);
+export const router = createBrowserRouter([
+  { errorElement: <PageFault />, hydrateFallbackElement: <Waiting label="The page is on its way" />, children: pages },
+]);
