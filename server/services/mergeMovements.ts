@@ -1,4 +1,3 @@
-import { Op } from 'sequelize';
 import type * as contract from '../../shared/contracts/movements';
 import { AppError } from '../../shared/errors';
 import { currentTransaction, database, inTransaction } from '../models/database';
@@ -104,7 +103,8 @@ const moves = [
 ];
 
 /**
- * What merged duplicates became, for ids that somebody still has from before: duplicate → movement.
+ * What merged duplicates became, for ids that somebody still has from before: duplicate → movement. In a transaction the movements
+ * are held until its end: a merge waits for it, and then moves what it wrote.
  * @param ids in any order, null for none
  */
 export async function followMerges(
@@ -112,13 +112,16 @@ export async function followMerges(
   ids: readonly (string | null)[],
 ): Promise<(id: string | null) => string | null> {
   const wanted = [...new Set(ids.filter((id) => id !== null))];
-  const merged =
+  const transaction = currentTransaction();
+  const movements =
     wanted.length === 0
       ? []
       : await Movement.findAll({
-          where: { teamId, id: wanted, mergedIntoId: { [Op.ne]: null } },
+          where: { teamId, id: wanted },
           attributes: ['id', 'mergedIntoId'],
+          order: [['id', 'ASC']],
+          ...(transaction ? { lock: transaction.LOCK.KEY_SHARE } : {}),
         });
-  const became = new Map(merged.map(({ id, mergedIntoId }) => [id, mergedIntoId]));
+  const became = new Map(movements.map(({ id, mergedIntoId }) => [id, mergedIntoId]));
   return (id) => (id === null ? null : (became.get(id) ?? id));
 }

@@ -1,7 +1,7 @@
 import { QueryTypes } from 'sequelize';
 import type { Block as PlanBlock } from '../../shared/contracts/sessions';
 import { AppError, type FieldErrors } from '../../shared/errors';
-import { currentTransaction, database } from '../models/database';
+import { database } from '../models/database';
 import { KitItem, Movement } from '../models/dictionary';
 import { Block, BlockLine, LineSubstitution } from '../models/sessions';
 import type { Actor } from './actor';
@@ -150,14 +150,10 @@ async function refuseFaulty(actor: Actor, sessionId: string, blocks: readonly Pl
   if (Object.keys(fields).length > 0) throw new AppError('invalid', { fields });
 }
 
-/** Held until the transaction ends: a merge waits for the plan, and then moves its lines too. */
 async function knownMovements(actor: Actor, blocks: readonly PlanBlock[]): Promise<Set<string>> {
-  const transaction = currentTransaction();
   const rows = await Movement.findAll({
     where: { teamId: actor.team.id, id: movementsOf(blocks), mergedIntoId: null },
     attributes: ['id'],
-    order: [['id', 'ASC']],
-    ...(transaction ? { lock: transaction.LOCK.KEY_SHARE } : {}),
   });
   return new Set(rows.map(({ id }) => id));
 }
