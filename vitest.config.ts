@@ -22,7 +22,7 @@ export default defineConfig({
       suite('standards'),
       suite('api', { needsStores: true, timeoutMs: 20_000 }),
       suite('jobs', { needsStores: true, timeoutMs: 120_000 }),
-      suite('start', { timeoutMs: 60_000 }),
+      suite('start', { timeoutMs: 120_000 }),
     ],
   },
 });
