@@ -11,7 +11,8 @@ import type { OwnedKit } from '../../shared/domain/kit/kit';
 import { oneReason } from '../../shared/domain/kit/myVersion';
 import { canDo } from '../../shared/domain/kit/owned';
 import { substitutionsFor } from '../../shared/domain/kit/substitutionsFor';
-import { resolve } from '../../shared/domain/search/resolveQuery';
+import { wordsOf } from '../../shared/domain/search/plainWords';
+import { type ResolvedQuery, resolve } from '../../shared/domain/search/resolveQuery';
 import { suggest as suggestMovements } from '../../shared/domain/search/suggest';
 import type { ChapterKind } from '../../shared/domain/words';
 import { ChapterRow } from '../models/marks';
@@ -43,12 +44,9 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
   const instead = [...ways.values()].flatMap((list) => list.map(({ movementId }) => movementId));
 
   const shown = await chaptersOfMovements(actor, [...new Set([...meant, ...instead])], kind ?? null);
-  const listed = new Set(meant.flatMap((id) => shown.of(id)).map(({ id }) => id));
-  const words =
-    query.accepted && query.leftOver.length > 0 ? query.leftOver : wordsToFind(q, dictionary, query.without);
-  const spoken = (await chaptersOfWords(actor, words, kind ?? null, mostSaid * 2))
-    .filter(({ id }) => !listed.has(id))
-    .slice(0, mostSaid);
+  const words = wordsToFind(q, query);
+  // beside a movement that is named, a line with only some of the words is noise
+  const spoken = await chaptersOfWords(actor, words, query.accepted ? 'all' : 'any', kind ?? null, mostSaid * 2);
 
   const chapters = await chaptersByIds([...shown.all(), ...spoken]);
   const moments = new Map((await presentMoments(actor, chapters)).map((moment) => [moment.chapterId, moment]));
@@ -75,7 +73,11 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
     else if (demos.length > 0) groups.push({ movement: named, heading: 'demos', inMyKit, findings: demos });
     if (demos.length === 0) notFilmed.push(id);
   }
-  const lines = spoken.flatMap((chapter) => finding(moments.get(chapter.id), 'said', said.get(chapter.id) ?? null));
+  const listed = new Set(groups.flatMap(({ findings }) => findings.map(({ moment }) => moment.chapterId)));
+  const lines = spoken
+    .filter(({ id, movementId }) => !listed.has(id) && !(movementId && meant.includes(movementId)))
+    .slice(0, mostSaid)
+    .flatMap((chapter) => finding(moments.get(chapter.id), 'said', said.get(chapter.id) ?? null));
   if (lines.length > 0) groups.push({ movement: null, heading: 'said', inMyKit: null, findings: lines });
 
   const name = (id: string) => ({ id, name: dictionary.movements.get(id)?.name ?? '' });
@@ -142,9 +144,11 @@ function waysAround(dictionary: TeamDictionary, movementId: string, usable: Owne
   if (answer.possible) return [];
   return answer.ways.slice(0, mostWays).map(({ movementId: id, reasons, doseRules }) => ({
     movementId: id,
-    note: [oneReason(reasons), doseRules.map(explainRule).join(', then ')].filter(Boolean).join(' · '),
+    note: [oneReason(reasons), ...doseRules.map(explainRule)].filter(Boolean).map(asSentence).join(' '),
   }));
 }
+
+const asSentence = (words: string) => `${words.charAt(0).toUpperCase()}${words.slice(1).replace(/\.$/, '')}.`;
 
 /** The moment that shows each way: where it was filmed as this substitution, else its best demo. */
 function insteadOf(
@@ -171,17 +175,10 @@ function finding(
   return moment ? [{ moment, why, said, note }] : [];
 }
 
-/** The words of a query but those that say what to do without. */
-function wordsToFind(q: string, dictionary: TeamDictionary, without: readonly string[]): string[] {
-  const words = q
-    .toLowerCase()
-    .split(/[^\p{L}\p{N}'’]+/u)
-    .filter(Boolean);
-  if (without.length === 0) return words;
-  const left = resolve(dictionary.search, q);
-  return left.leftOver.length > 0
-    ? left.leftOver
-    : left.movements.slice(0, 1).flatMap(({ matched }) => matched.split(' '));
+/** What to look for in what was said: the words that name no movement, or else the name that was meant, spelled as it is. */
+function wordsToFind(q: string, { accepted, leftOver, movements }: ResolvedQuery): string[] {
+  if (leftOver.length > 0) return leftOver;
+  return wordsOf(accepted ? (movements[0]?.matched ?? '') : q);
 }
 
 async function chaptersByIds(found: readonly { id: string }[]): Promise<ChapterRow[]> {

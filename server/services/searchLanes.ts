@@ -58,16 +58,18 @@ export async function chaptersOfMovements(actor: Actor, movementIds: readonly st
 }
 
 /**
- * Chapters in whose names, title, notes, cues or captions words stand: those with all of them, or else with any.
+ * Chapters in whose names, title, notes, cues or captions words stand: those with all of them; where none has and
+ * `any` will do, those with some.
  * Plan: bitmap scan of `chapter_search_document`; `+ interval '0'` keeps the planner off a walk by date that filters by `@@`.
  */
 export async function chaptersOfWords(
   actor: Actor,
   words: readonly string[],
+  needed: 'all' | 'any',
   kind: ChapterKind | null,
   most: number,
 ): Promise<FoundChapter[]> {
-  for (const text of [allWords(words), anyWord(words)]) {
+  for (const text of needed === 'all' ? [allWords(words)] : [allWords(words), anyWord(words)]) {
     if (text === '') return [];
     const rows = await database().query<FoundChapter>(
       `select id, "movementId", "standsInForMovementId", kind from (

@@ -101,7 +101,7 @@ describe('find', () => {
       why: 'substitution',
       moment: { startMs: 20_000, missingText: 'no rings', standsInFor: { name: 'Ring row' } },
     });
-    expect(instead.note).toBe('The same pull with a door. · half again as many, at most 15');
+    expect(instead.note).toBe('The same pull with a door. Half again as many, at most 15.');
     expect(found.hiddenByKit).toBe(1);
   });
 
