@@ -31,6 +31,20 @@ export async function clearExhausted(handlers: readonly Handler[], log: Log): Pr
     });
 }
 
+/**
+ * Frees what a worker that has stopped still holds. The queue itself notes the end of a job without waiting for it, and
+ * loses the note when the process ends; a try that was stopped is not counted.
+ */
+export async function giveBack(workerIds: string[]): Promise<void> {
+  if (workerIds.length === 0) return;
+  await database().query(
+    `update graphile_worker._private_jobs
+     set locked_by = null, locked_at = null, run_at = now(), attempts = greatest(0, attempts - 1), last_error = :stopped
+     where locked_by in (:workerIds)`,
+    { replacements: { workerIds, stopped: stoppedMessage } },
+  );
+}
+
 async function exhaustedIds(names: string[]): Promise<string[]> {
   await database().query(
     `update graphile_worker._private_jobs set attempts = attempts - 1, run_at = now()

@@ -2,9 +2,10 @@ import { EventEmitter } from 'node:events';
 import { Logger, makeWorkerUtils, type Runner, run, type TaskList, type WorkerEvents } from 'graphile-worker';
 import pg from 'pg';
 import type { Log } from '../middleware/log';
-import { clearExhausted, stoppedMessage } from './exhausted';
+import { clearExhausted, giveBack, stoppedMessage } from './exhausted';
 import type { Handler } from './handler';
 import { keepBeating } from './heartbeat';
+import { sweepPrivateFolders } from './privateFolder';
 
 export type Queue = { stop(): Promise<void> };
 
@@ -18,10 +19,13 @@ export async function startQueue(
   jobsAtOnce: number,
   log: Log,
 ): Promise<Queue> {
+  await sweepPrivateFolders();
   const stopping = new AbortController();
   const workerIds = new Set<string>();
   const pool = new pg.Pool({ connectionString: databaseUrl, max: jobsAtOnce + 3 });
-  pool.on('error', (error) => log.warn({ err: error }, 'queue pool'));
+  const onError = (error: Error) => log.warn({ err: error }, 'queue pool');
+  pool.on('error', onError);
+  pool.on('connect', (client) => client.on('error', onError));
   const logger = quiet(log);
   const utils = await makeWorkerUtils({ pgPool: pool, logger });
 
@@ -42,10 +46,9 @@ export async function startQueue(
     ]),
   );
 
-  // listened to before the first worker exists
+  // listened to before the first worker exists; jobs are locked in the name of the pool, not of its workers
   const events: WorkerEvents = new EventEmitter();
-  events.on('worker:create', ({ worker }) => workerIds.add(worker.workerId));
-  events.on('worker:stop', ({ worker }) => workerIds.delete(worker.workerId));
+  events.on('pool:create', ({ workerPool }) => workerIds.add(workerPool.id));
   const runner: Runner = await run({
     events,
     pgPool: pool,
@@ -66,6 +69,7 @@ export async function startQueue(
     async stop() {
       stopping.abort(new Error(stoppedMessage));
       await runner.stop().catch((error: unknown) => log.warn({ err: error }, 'queue stopped hard'));
+      await giveBack([...workerIds]);
       await stopBeating();
       await utils.release();
       await pool.end();

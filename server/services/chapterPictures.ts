@@ -39,12 +39,14 @@ export type PicturesToMake = {
 
 /** What a recording's chapters should look like and lack; null while nothing plays that pictures could be taken from. */
 export async function picturesToMake(of: OfRecording): Promise<PicturesToMake | null> {
-  const [playback, chapters, pictures] = await Promise.all([
-    RecordingAsset.findOne({ where: { ...of, kind: 'playback' } }),
-    ChapterRow.findAll({ where: of, attributes: ['id', 'startMs', 'endMs'], order: [['startMs', 'asc']] }),
-    RecordingAsset.findAll({ where: { ...of, kind: 'chapterPicture' }, attributes: ['name'] }),
-  ]);
+  const playback = await RecordingAsset.findOne({ where: { ...of, kind: 'playback' } });
   if (!playback) return null;
+  const chapters = await ChapterRow.findAll({
+    where: of,
+    attributes: ['id', 'startMs', 'endMs'],
+    order: [['startMs', 'asc']],
+  });
+  const pictures = await RecordingAsset.findAll({ where: { ...of, kind: 'chapterPicture' }, attributes: ['name'] });
   const wanted = chapters.map((chapter) => {
     const atMs = pictureAt(chapter);
     const name = `chapter-${inputOf('chapterPictures', pictureVersion, playback.name, chapter.id, atMs)}.jpg`;

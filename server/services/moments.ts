@@ -37,27 +37,20 @@ export type MomentSource = Pick<
 >;
 
 /**
- * Chapters as moments, in the order given; a query a table, however many there are.
+ * Chapters as moments, in the order given; a query a table, however many there are, one after the other: it may be
+ * called in a transaction, which is one connection.
  * Whoever calls has asked for visible chapters alone (`visibleChaptersWhere`).
  */
 export async function presentMoments(actor: Actor, chapters: readonly MomentSource[]): Promise<Moment[]> {
   if (chapters.length === 0) return [];
   const teamId = actor.team.id;
-  const [recordings, movements, withoutTexts, pictures] = await Promise.all([
-    recordingsOf(teamId, chapters),
-    namesOfMovements(
-      teamId,
-      chapters.flatMap((chapter) => [chapter.movementId, chapter.standsInForMovementId]),
-    ),
-    withoutTextsOf(
-      teamId,
-      chapters.map((chapter) => chapter.missingKitItemId),
-    ),
-    chapterPictureUrls(
-      teamId,
-      chapters.map((chapter) => chapter.id),
-    ),
-  ]);
+  const recordings = await recordingsOf(teamId, chapters);
+  const movementIds = chapters.flatMap((chapter) => [chapter.movementId, chapter.standsInForMovementId]);
+  const movements = await namesOfMovements(teamId, movementIds);
+  const kitItemIds = chapters.map((chapter) => chapter.missingKitItemId);
+  const withoutTexts = await withoutTextsOf(teamId, kitItemIds);
+  const chapterIds = chapters.map((chapter) => chapter.id);
+  const pictures = await chapterPictureUrls(teamId, chapterIds);
   const movement = (id: string | null) => {
     const name = id === null ? undefined : movements.get(id);
     return id === null || name === undefined ? null : { id, name };
@@ -130,10 +123,8 @@ async function recordingsOf(teamId: string, chapters: readonly MomentSource[]): 
   });
   const sessionIds = distinct(recordings.map((recording) => recording.sessionId));
   const coachIds = distinct(recordings.map((recording) => recording.coachId));
-  const [sessions, coaches] = await Promise.all([
-    Session.findAll({ where: { teamId, id: sessionIds }, attributes: ['id', 'date', 'title'] }),
-    Person.findAll({ where: { id: coachIds }, attributes: ['id', 'name'] }),
-  ]);
+  const sessions = await Session.findAll({ where: { teamId, id: sessionIds }, attributes: ['id', 'date', 'title'] });
+  const coaches = await Person.findAll({ where: { id: coachIds }, attributes: ['id', 'name'] });
   const session = new Map(sessions.map(({ id, date, title }) => [id, { id, date, title }]));
   const coach = new Map(coaches.map(({ id, name }) => [id, name]));
   return new Map(

@@ -2,6 +2,7 @@ import type { MakingStep } from '../../shared/domain/words';
 import { madeKey, madePrefix, originalsPrefix } from '../../storage/keys';
 import { enqueue, makePlayback, makePoster, probeRecording, removeObjects } from '../jobs/definitions';
 import { currentTransaction, inTransaction } from '../models/database';
+import { ChapterRow } from '../models/marks';
 import { Membership, Notice } from '../models/people';
 import { Recording, RecordingAsset, type RecordingFailure, Upload } from '../models/recordings';
 import { requestChapterPictures } from './chapterPictures';
@@ -54,8 +55,10 @@ export async function noteProbed(of: OfRecording, originalKey: string, input: st
   await inTransaction(async () => {
     const recording = await lockedRecording(of, originalKey);
     if (!recording) return;
-    const { recordedAt, ...rest } = facts;
-    await recording.update({ ...rest, recordedAt: recordedAt === null ? null : new Date(recordedAt) });
+    const recordedAt = facts.recordedAt === null ? null : new Date(facts.recordedAt);
+    // what was marked before the file was read may end within its last picture
+    const markedMs = (await ChapterRow.max<number | null, ChapterRow>('endMs', { where: of })) ?? 0;
+    await recording.update({ ...facts, durationMs: Math.max(facts.durationMs, markedMs), recordedAt });
     await finishStep(of, 'probe', input);
     await askForMaking(of);
   });

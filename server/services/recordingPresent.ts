@@ -8,18 +8,21 @@ import { Session } from '../models/sessions';
 import { countCaptionLines } from './captionCounts';
 import { mediaUrl } from './context';
 
-/** Recordings as those who work on drafts see them, in the order given; a query a table, however many there are. */
+/**
+ * Recordings as those who work on drafts see them, in the order given; a query a table, however many there are, one after
+ * the other: it may be called in a transaction, which is one connection.
+ */
 export async function presentRecordings(teamId: string, recordings: readonly Recording[]): Promise<RecordingAnswer[]> {
   if (recordings.length === 0) return [];
   const ids = recordings.map((recording) => recording.id);
-  const [sessions, coaches, steps, posters, chapters, lines] = await Promise.all([
-    Session.findAll({ where: { teamId, id: distinct(recordings.map((recording) => recording.sessionId)) } }),
-    Person.findAll({ where: { id: distinct(recordings.map((recording) => recording.coachId)) } }),
-    RecordingStep.findAll({ where: { teamId, recordingId: ids } }),
-    posterUrls(teamId, ids),
-    chapterCounts(teamId, ids),
-    countCaptionLines(teamId, ids),
-  ]);
+  const sessionIds = distinct(recordings.map((recording) => recording.sessionId));
+  const sessions = await Session.findAll({ where: { teamId, id: sessionIds } });
+  const coachIds = distinct(recordings.map((recording) => recording.coachId));
+  const coaches = await Person.findAll({ where: { id: coachIds }, attributes: ['id', 'name'] });
+  const steps = await RecordingStep.findAll({ where: { teamId, recordingId: ids } });
+  const posters = await posterUrls(teamId, ids);
+  const chapters = await chapterCounts(teamId, ids);
+  const lines = await countCaptionLines(teamId, ids);
   const sessionById = new Map(sessions.map((session) => [session.id, session]));
   const coachById = new Map(coaches.map((coach) => [coach.id, coach]));
   return recordings.map((recording) => {

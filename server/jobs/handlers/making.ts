@@ -1,8 +1,5 @@
 import { createHash } from 'node:crypto';
 import { createWriteStream } from 'node:fs';
-import { mkdtemp, rm } from 'node:fs/promises';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
 import { Transform } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { MakingStep } from '../../../shared/domain/words';
@@ -13,18 +10,9 @@ import { giveUp } from '../../services/recordingMaking';
 import type { OfRecording } from '../../services/recordingSteps';
 import type { JobContext } from '../handler';
 
-/** What all steps of making have in common: a private folder, the file to work on, and what a fault means. */
+export { inPrivateFolder } from '../privateFolder';
 
-/** A folder for one run of one step; it goes with everything in it, however the run ends. */
-export async function inPrivateFolder<T>(work: (folder: string) => Promise<T>): Promise<T> {
-  // mkdtemp makes the folder with mode 0700
-  const folder = await mkdtemp(join(tmpdir(), 'tapeline-making-'));
-  try {
-    return await work(folder);
-  } finally {
-    await rm(folder, { recursive: true, force: true });
-  }
-}
+/** What all steps of making have in common: the file to work on, and what a fault means. */
 
 /**
  * Fetches an object as a file.
