@@ -4,6 +4,7 @@ import type { Request, RequestHandler, Response } from 'express';
 import { AppError } from '../../shared/errors';
 import { madeKey } from '../../storage/keys';
 import { mediaPathIsValid } from '../../storage/signing';
+import { store } from '../services/context';
 import { openBytes } from './storeBytes';
 
 const namePattern = /^[a-z0-9][a-zA-Z0-9._-]{0,120}$/;
@@ -27,7 +28,9 @@ export function serveMedia(secret: string): RequestHandler {
     const gone = new AbortController();
     res.on('close', () => gone.abort());
     try {
-      const bytes = await askedBytes(req, madeKey(teamId, ownerId, name), gone.signal);
+      const key = madeKey(teamId, ownerId, name);
+      const bytes = await askedBytes(req, key, gone.signal);
+      if (bytes.statusCode === 416) await refuseRange(bytes, key, res);
       await pass(bytes, req, res);
     } catch (error) {
       // a reader that went away is not an error
@@ -49,15 +52,16 @@ async function askedBytes(req: Request, key: string, signal: AbortSignal): Promi
   return openBytes(key, undefined, signal);
 }
 
+/** RFC 9110, 15.5.17: the answer says how long the whole is; not every store does. */
+async function refuseRange(bytes: IncomingMessage, key: string, res: Response): Promise<never> {
+  bytes.resume();
+  const size = (await store().head(key))?.sizeBytes;
+  if (size !== undefined) res.setHeader('Content-Range', `bytes */${size}`);
+  throw new AppError('rangeNotSatisfiable');
+}
+
 async function pass(bytes: IncomingMessage, req: Request, res: Response): Promise<void> {
   const status = bytes.statusCode ?? 500;
-  if (status === 416) {
-    bytes.resume();
-    // RFC 9110, 15.5.17: the answer says how long the whole is
-    const range = bytes.headers['content-range'];
-    if (range) res.setHeader('Content-Range', range);
-    throw new AppError('rangeNotSatisfiable');
-  }
   if (status !== 200 && status !== 206) {
     bytes.resume();
     throw new AppError(status === 404 || status === 403 ? 'notFound' : 'unavailable');
