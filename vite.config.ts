@@ -12,7 +12,7 @@ export default defineConfig({
     // the Host header stays as the browser sent it, so that the server's same-origin check sees one origin
     // what the running product writes is no source
     watch: { ignored: ['**/storage/data/**', '**/dist/**'] },
-    proxy: { '/api': { target: api }, '/m': { target: api } },
+    proxy: { '/api': { target: api }, '/m/': { target: api } },
   },
   build: {
     outDir: 'dist/client',

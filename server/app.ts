@@ -37,6 +37,7 @@ export async function createApp(config: Config, log: Log): Promise<App> {
   app.set('trust proxy', config.trustedProxies);
   app.set('query parser', 'simple');
   app.locals.liveHub = hub;
+  app.locals.publicUrl = config.publicUrl;
 
   app.use(requestLog(log));
   app.use(securityHeaders(config));

@@ -17,8 +17,7 @@ export function signInLayers(config: Config, pool: pg.Pool, rateLimits: Limits):
   const Store = connectPgSimple(session);
   return [
     session({
-      // ASVS 5.0 3.3.3: the prefix binds the cookie to this host over https
-      name: cookieName(config.https),
+      name: cookieName(config.publicUrl),
       secret: config.sessionSecret,
       store: new Store({ pool, tableName: 'sign_ins', createTableIfMissing: false, pruneSessionInterval: false }),
       resave: false,
@@ -41,7 +40,14 @@ export function signInLayers(config: Config, pool: pg.Pool, rateLimits: Limits):
   ];
 }
 
-export const cookieName = (isHttps: boolean): string => (isHttps ? '__Host-tapeline' : 'tapeline');
+/**
+ * Over https the prefix binds the cookie to this host (ASVS 5.0 3.3.3). Cookies know no ports: on a machine that runs two of us
+ * without https, the name keeps them apart.
+ */
+function cookieName(publicUrl: string): string {
+  const { protocol, port } = new URL(publicUrl);
+  return protocol === 'https:' ? '__Host-tapeline' : `tapeline${port ? `-${port}` : ''}`;
+}
 
 function localPassport(): passport.PassportStatic {
   passport.use(
@@ -113,5 +119,10 @@ export async function startSignIn(req: Request, user: Express.User): Promise<voi
 export async function endSignIn(req: Request, res: Response): Promise<void> {
   const { secure, path } = req.session.cookie;
   await new Promise<void>((resolve, reject) => req.session.destroy((error) => (error ? reject(error) : resolve())));
-  res.clearCookie(cookieName(Boolean(secure)), { path, httpOnly: true, sameSite: 'lax', secure: Boolean(secure) });
+  res.clearCookie(cookieName(req.app.locals.publicUrl as string), {
+    path,
+    httpOnly: true,
+    sameSite: 'lax',
+    secure: Boolean(secure),
+  });
 }

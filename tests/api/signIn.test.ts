@@ -25,7 +25,7 @@ const isSignedIn = async (browser: Visitor) => (await browser.get('/api/me').exp
 
 /** The session id in a cookie: "s:<id>.<signature>". */
 function sessionIdOf(setCookie: unknown): string | undefined {
-  return /tapeline=s%3A([^.]+)\./.exec(String(setCookie))?.[1];
+  return /tapeline(?:-\d+)?=s%3A([^.]+)\./.exec(String(setCookie))?.[1];
 }
 
 function signInRows(person: Person) {

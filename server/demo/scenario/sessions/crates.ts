@@ -105,7 +105,7 @@ export const crates: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Squat jump, no box',
+          title: 'Squat jump',
           block: 'workout',
           movement: 'squat-jump',
           standsInFor: 'box-jump',
@@ -149,7 +149,7 @@ export const crates: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Split squat, no box',
+          title: 'Split squat',
           block: 'workout',
           movement: 'split-squat',
           standsInFor: 'box-step-up',

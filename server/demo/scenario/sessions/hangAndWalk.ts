@@ -175,7 +175,7 @@ export const hangAndWalk: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Backpack carry, no kettlebell',
+          title: 'Backpack carry',
           block: 'workout',
           movement: 'backpack-carry',
           standsInFor: 'suitcase-carry',

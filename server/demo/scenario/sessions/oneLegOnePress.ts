@@ -156,7 +156,7 @@ export const oneLegOnePress: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Pike push-up, no dumbbell',
+          title: 'Pike push-up',
           block: 'workout',
           movement: 'pike-push-up',
           standsInFor: 'dumbbell-press',

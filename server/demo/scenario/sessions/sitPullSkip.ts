@@ -116,7 +116,7 @@ export const sitPullSkip: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Slow air squat, no kettlebell',
+          title: 'Slow air squat',
           block: 'workout',
           movement: 'slow-air-squat',
           standsInFor: 'goblet-squat',
@@ -154,7 +154,7 @@ export const sitPullSkip: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Towel row, no rings',
+          title: 'Towel row',
           block: 'workout',
           movement: 'towel-row',
           standsInFor: 'ring-row',
@@ -199,7 +199,7 @@ export const sitPullSkip: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Line hop, no rope',
+          title: 'Line hop',
           block: 'workout',
           movement: 'line-hop',
           standsInFor: 'rope-skip',

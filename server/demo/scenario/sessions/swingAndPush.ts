@@ -148,7 +148,7 @@ export const swingAndPush: DemoSession = {
         },
         {
           kind: 'substitution',
-          title: 'Band good morning, no kettlebell',
+          title: 'Band good morning',
           block: 'workout',
           movement: 'band-good-morning',
           standsInFor: 'kettlebell-swing',
