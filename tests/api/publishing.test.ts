@@ -1,9 +1,11 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { inTransaction } from '../../server/models/database';
 import type { KitItem, Movement } from '../../server/models/dictionary';
 import { AuditEvent, Notice } from '../../server/models/people';
 import type { Recording } from '../../server/models/recordings';
 import { Block, LineSubstitution, Session } from '../../server/models/sessions';
 import { bumpDictionary } from '../../server/services/dictionary';
+import { refreshSearchOf } from '../../server/services/searchIndex';
 import { type Api, makeMember, makeTeamOfFour, startApi, type TeamOfFour, type Visitor } from '../support/api';
 import {
   chapter,
@@ -248,5 +250,25 @@ describe('publishing', () => {
         .send({ date: session.date, title: 'Late change', blocks: current.blocks, version: 1 }),
     ]);
     expect([published.status, saved.status].sort()).toEqual([200, 409]);
+  });
+
+  it('back to a draft while somebody corrects the captions hides it all the same', async () => {
+    const { session, recording } = await draftThatShows();
+    await publish(session).expect(200);
+    const captions = { version: 0, lines: [{ startMs: 0, endMs: 2000, text: 'Elbows back.' }] };
+    let saving: Promise<{ status: number }> | undefined;
+    await inTransaction(async () => {
+      await Session.update({ state: 'draft', publishedAt: null }, { where: { id: session.id } });
+      await refreshSearchOf({ sessionId: session.id });
+      // arrives before the other has ended, and must wait for it
+      saving = coach
+        .put(at(`recordings/${recording.id}/captions`))
+        .send(captions)
+        .then((answer) => answer);
+      await new Promise((resolve) => setTimeout(resolve, 400));
+    });
+    expect((await saving)?.status).toBe(200);
+    expect(await found(member, row.name)).toEqual([]);
+    expect(await found(coach, row.name)).toEqual(['demo']);
   });
 });
