@@ -31,7 +31,10 @@ export function connectPicture(player: Player, playhead: Playhead, latest: () =>
     if (at > 0) playhead.seekTo(at);
     player.src({ src: url, type });
   };
-  const retry = () => load(latest().source);
+  const retry = () => {
+    tries += 1;
+    load(latest().source);
+  };
   const retryOnline = () => {
     if (playhead.current().state === 'broken') retry();
   };
@@ -73,14 +76,13 @@ export function connectPicture(player: Player, playhead: Playhead, latest: () =>
   player.on(['timeupdate', 'seeking', 'seeked', 'loadedmetadata'], () => playhead.tick());
   player.on('error', () => {
     if (!player.error()) return;
-    seeks.forget();
     const at = playhead.atMs();
+    seeks.forget();
     playhead.report({ state: 'broken', frame: 'awaited', fault: faultOf(player.error()?.code, tries) });
     playhead.seekTo(at);
     const { onExpired } = latest();
     clearTimeout(timer);
     timer = setTimeout(retry, retryMs[Math.min(tries, retryMs.length - 1)]);
-    tries += 1;
     onExpired?.();
   });
   window.addEventListener('online', retryOnline);
@@ -109,8 +111,8 @@ export function connectPicture(player: Player, playhead: Playhead, latest: () =>
       clearTimeout(timer);
       cancelAnimationFrame(frame);
       window.removeEventListener('online', retryOnline);
-      seeks.forget();
       playhead.attach(null);
+      seeks.forget();
     },
   };
 }
@@ -155,7 +157,9 @@ function seekOneByOne(player: Player, fps: () => number) {
 /** MediaError codes as HTML's media elements have them: 2 network, 3 decoding, 4 no such source. */
 function faultOf(code: number | undefined, tries: number): string {
   if (!navigator.onLine) return 'There is no connection. The picture goes on by itself when it is back.';
-  if (code === 3 || (code === 4 && tries >= 3))
-    return 'This browser cannot show the picture. It tries again; another browser may do better.';
+  if (code === 3) return 'The picture broke off. It is tried again by itself.';
+  // the same code for a server that does not answer and for a format that is not known
+  if (code === 4 && tries >= 3)
+    return 'The picture does not arrive, or this browser cannot show it. It is tried again by itself.';
   return 'The picture does not arrive. It goes on by itself as soon as it can.';
 }

@@ -24,7 +24,7 @@ export function CueList({ playhead, moves, cues }: Props) {
               aria-current={id === nowId ? 'true' : undefined}
               className={clsx(
                 'flex min-h-12 w-full items-baseline gap-4 border-l-4 py-2.5 ps-3 text-start hover:bg-surface focus-visible:outline-offset-[-3px]',
-                id === nowId ? 'border-yellow font-bold' : 'border-line',
+                id === nowId ? 'cue-now font-bold' : 'border-line',
               )}
               onClick={() => moves.to(atMs)}
             >

@@ -27,7 +27,7 @@ export function PictureNotes({ playhead, moves, start }: { playhead: Playhead; m
       {fault ? (
         <div
           role="alert"
-          className="absolute inset-x-3 top-3 rounded bg-shade px-3 py-2 text-sm font-bold text-onShade"
+          className="absolute inset-x-3 top-3 border-l-4 border-danger bg-ground px-3 py-2 text-sm font-bold"
         >
           {fault}
         </div>
@@ -41,7 +41,11 @@ export function PictureNotes({ playhead, moves, start }: { playhead: Playhead; m
             <Icon name={state === 'ended' ? 'loop' : 'play'} />
             {state === 'ended' ? 'From the beginning' : carriesOn ? `Carry on at ${formatMs(start.atMs)}` : 'Play'}
           </GoButton>
-          {begun === 'not yet' && carriesOn && <StartOver onPress={startOver} />}
+          {begun === 'not yet' && carriesOn && (
+            <div className="rounded bg-shade">
+              <StartOver onPress={startOver} />
+            </div>
+          )}
         </div>
       )}
     </div>
@@ -93,7 +97,7 @@ function StartOver({ onPress }: { onPress: () => void }) {
   return (
     <button
       type="button"
-      className="min-h-12 rounded bg-shade px-3 text-sm font-extrabold text-onShade underline underline-offset-3"
+      className="min-h-12 px-3 text-sm font-extrabold text-onShade underline underline-offset-3"
       onClick={onPress}
     >
       Start over

@@ -1,3 +1,4 @@
+import { clsx } from 'clsx';
 import type { Watch } from '../../../shared/contracts/watch';
 import { formatMs } from '../../../shared/domain/timecode';
 import { Still } from '../../components/Still';
@@ -10,11 +11,11 @@ export function SeekBubble({ atMs, durationMs, chapter }: Props) {
   return (
     // anchored by the share itself, so that it never leaves the bar at either end
     <div
-      className="seek-bubble"
+      className={clsx('seek-bubble', chapter?.pictureUrl && 'w-43!')}
       aria-hidden="true"
       style={{ left: `${100 * share}%`, translate: `${-100 * share}% 0` }}
     >
-      {chapter?.pictureUrl && <Still src={chapter.pictureUrl} loading="eager" className="w-40 rounded-none!" />}
+      {chapter?.pictureUrl && <Still src={chapter.pictureUrl} loading="eager" className="w-full rounded-none!" />}
       <div className="flex items-baseline gap-2 px-2.5 py-1 text-sm">
         <span className="font-extrabold">{formatMs(atMs)}</span>
         {chapter && <span className="min-w-0 truncate">{chapter.title}</span>}

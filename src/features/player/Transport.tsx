@@ -18,17 +18,17 @@ export function Transport({ playhead, moves, durationMs, full }: Props) {
   const atMs = useAtMs(playhead, 1000);
   const own = useOwnWindow(playhead);
   return (
-    <div className="flex flex-wrap items-center gap-x-3 gap-y-1">
-      <p className="order-1 me-auto text-sm whitespace-nowrap min-[360px]:text-base md:order-2">
+    <div className="stage-transport">
+      <p className="stage-time">
         <span className="font-extrabold">{formatMs(atMs)}</span>
         <span className="text-ink2"> of {formatMs(durationMs)}</span>
       </p>
-      <div className="order-2 flex items-center md:order-1">
+      <div className="flex grow items-center md:grow-0">
         <IconButton icon="previous" label="Chapter before" look="quiet" onClick={moves.previous} />
         <PlayButton playhead={playhead} />
         <IconButton icon="next" label="Next chapter" look="quiet" onClick={moves.next} />
       </div>
-      <div className="order-3 flex items-center">
+      <div className="flex items-center">
         <IconButton
           icon={sound === 'on' ? 'sound' : 'mute'}
           label={sound === 'on' ? 'Sound off' : 'Sound on'}
@@ -65,7 +65,7 @@ function PlayButton({ playhead }: { playhead: Playhead }) {
     <IconButton
       icon={isGoing ? 'pause' : 'play'}
       label={isGoing ? 'Pause' : 'Play'}
-      className="min-w-16!"
+      className="min-w-16! grow"
       onClick={() => playhead.toggle()}
     />
   );

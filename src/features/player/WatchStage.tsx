@@ -1,4 +1,4 @@
-import { useRef } from 'react';
+import { type CSSProperties, useRef } from 'react';
 import { exportCaptions } from '../../../shared/contracts/marks';
 import type { Watch } from '../../../shared/contracts/watch';
 import { VideoPlayer } from '../../components/VideoPlayer';
@@ -40,6 +40,7 @@ export function WatchStage({ team, watch, skips, playhead, moves, start, caption
       aria-label="Player"
       className="stage"
       data-controls={controls}
+      style={{ '--shape': watch.width / watch.height } as CSSProperties}
       onKeyDown={(event) => {
         touch();
         onKeyDown(event);

@@ -1,5 +1,5 @@
 import { queryOptions, useQueryClient } from '@tanstack/react-query';
-import { useCallback } from 'react';
+import { useMemo } from 'react';
 import { getWatch, keepPlace } from '../../../shared/contracts/watch';
 import { ApiError, call } from '../../lib/api';
 
@@ -20,20 +20,28 @@ export const watchQuery = (team: string, recordingId: string) =>
     refetchInterval: ({ state }) => {
       if (isNotReady(state.error)) return askAgainMs;
       if (!state.data) return false;
-      return Math.max(askAgainMs, Date.parse(state.data.addressesEndAt) - Date.now() - renewBeforeMs);
+      return Math.max(1000, Date.parse(state.data.addressesEndAt) - Date.now() - renewBeforeMs);
     },
     // the sound goes on behind another tab, so its address must too
     refetchIntervalInBackground: true,
   });
 
 /** Keeps where one stopped. What does not arrive is not worth a word: the next one says it anew. */
-export function useKeepPlace(team: string, recordingId: string): (atMs: number) => void {
+export function useKeepPlace(team: string, recordingId: string) {
   const queries = useQueryClient();
-  return useCallback(
-    (atMs) => {
-      queries.setQueryData(watchQuery(team, recordingId).queryKey, (watch) => watch && { ...watch, placeMs: atMs });
-      call(keepPlace, { team, recordingId, atMs }, { afterPage: 'kept' }).catch(() => undefined);
-    },
+  return useMemo(
+    () => ({
+      keep(atMs: number) {
+        call(keepPlace, { team, recordingId, atMs }, { afterPage: 'kept' }).catch(() => undefined);
+      },
+      /** Only now is the answer at hand changed: while it is watched, a change would put off its renewal. */
+      leave(placeMs: number) {
+        const { queryKey } = watchQuery(team, recordingId);
+        const updatedAt = queries.getQueryState(queryKey)?.dataUpdatedAt;
+        if (updatedAt !== undefined)
+          queries.setQueryData(queryKey, (watch) => watch && { ...watch, placeMs }, { updatedAt });
+      },
+    }),
     [queries, team, recordingId],
   );
 }

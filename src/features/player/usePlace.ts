@@ -5,8 +5,10 @@ const everyMs = 5000;
 /** less is no change worth a request */
 const leastMs = 500;
 
+type Places = { keep(atMs: number): void; leave(atMs: number): void };
+
 /** Keeps where one is: every few seconds while it plays, when it stops, and when the page is left. */
-export function usePlace(playhead: Playhead, keep: (atMs: number) => void): void {
+export function usePlace(playhead: Playhead, { keep, leave }: Places): void {
   useEffect(() => {
     let kept: number | null = null;
     const note = () => {
@@ -17,8 +19,11 @@ export function usePlace(playhead: Playhead, keep: (atMs: number) => void): void
       kept = at;
       keep(at);
     };
+    let before = playhead.current().state;
     const follow = () => {
       const { state } = playhead.current();
+      if (state === before) return;
+      before = state;
       // where it starts is known already
       if (kept === null && state !== 'loading' && state !== 'broken') kept = playhead.atMs();
       if (state === 'paused' || state === 'ended') note();
@@ -27,17 +32,16 @@ export function usePlace(playhead: Playhead, keep: (atMs: number) => void): void
       if (document.visibilityState === 'hidden') note();
     };
     const stop = playhead.subscribe(follow);
-    const timer = setInterval(() => {
-      if (playhead.current().state === 'playing') note();
-    }, everyMs);
+    const timer = setInterval(note, everyMs);
     document.addEventListener('visibilitychange', hide);
     window.addEventListener('pagehide', note);
     return () => {
       note();
+      if (kept !== null) leave(kept);
       stop();
       clearInterval(timer);
       document.removeEventListener('visibilitychange', hide);
       window.removeEventListener('pagehide', note);
     };
-  }, [playhead, keep]);
+  }, [playhead, keep, leave]);
 }
