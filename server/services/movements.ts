@@ -12,7 +12,7 @@ import { ChapterRow } from '../models/marks';
 import type { Actor } from './actor';
 import { audit } from './audit';
 import { mediaUrl } from './context';
-import { bumpDictionary, dictionaryOf } from './dictionary';
+import { bumpDictionary, dictionaryOf, type TeamDictionary } from './dictionary';
 import { presentMoments, visibleChaptersWhere } from './moments';
 import { pageOf, readCursor } from './pages';
 import { refreshSearchOf } from './searchIndex';
@@ -68,13 +68,24 @@ function readNameCursor(cursor: string | undefined): { name: string; id: string 
 const NameCursor = z.object({ name: shortText(200), id: Id });
 
 async function byMeaning(actor: Actor, q: string, { pattern, limit }: ListQuery): Promise<Page> {
-  const { movements, didYouMean } = resolve((await dictionaryOf(actor.team.id)).search, q);
-  const ids = (movements.length > 0 ? movements : didYouMean).map(({ id }) => id);
+  const dictionary = await dictionaryOf(actor.team.id);
+  const { movements, didYouMean, without } = resolve(dictionary.search, q);
+  const meant = (movements.length > 0 ? movements : didYouMean).map(({ id }) => id);
+  const ids = without.length > 0 ? doneWithout(dictionary, without, meant) : meant;
   const rows = await Movement.findAll({
     where: { teamId: actor.team.id, id: ids, mergedIntoId: null, ...(pattern ? { pattern } : {}) },
   });
   const inOrder = rows.toSorted((a, b) => ids.indexOf(a.id) - ids.indexOf(b.id)).slice(0, limit);
   return { items: await presentList(actor, inOrder), nextCursor: null };
+}
+
+/** "row without rings": what asks for none of these; of all movements where the query names only kit. */
+function doneWithout({ movements }: TeamDictionary, without: readonly string[], meant: readonly string[]): string[] {
+  const isDone = (id: string) =>
+    (movements.get(id)?.kitNeeded ?? []).every(({ anyOf }) =>
+      anyOf.some((option) => !without.includes(option.kitItemId)),
+    );
+  return (meant.length > 0 ? meant : [...movements.keys()]).filter(isDone);
 }
 
 async function presentList(actor: Actor, rows: Movement[]): Promise<contract.MovementInList[]> {

@@ -14,7 +14,7 @@ export const LineSubstitution = z.object({
   missing: z.enum(missingThings),
   missingKitItemId: Id.nullable().default(null),
   dose: Dose,
-  reason: z.string().trim().max(200).default(''),
+  reason: longText(200).default(''),
 });
 
 /** Ids are made by whoever adds a line, so that chapters keep pointing at the block they show. */
@@ -22,7 +22,7 @@ export const PlanLine = z.object({
   id: Id,
   movementId: Id,
   dose: Dose,
-  note: z.string().trim().max(200).default(''),
+  note: longText(200).default(''),
   substitutions: z.array(LineSubstitution).max(limits.substitutionsPerLine).default([]),
 });
 export type PlanLine = z.infer<typeof PlanLine>;
@@ -30,7 +30,7 @@ export type PlanLine = z.infer<typeof PlanLine>;
 export const Block = z.object({
   id: Id,
   kind: z.enum(blockKinds),
-  title: z.string().trim().max(120).default(''),
+  title: longText(120).default(''),
   scheme: Scheme.nullable().default(null),
   note: longText(1000).default(''),
   lines: z.array(PlanLine).max(limits.linesPerBlock).default([]),
@@ -42,7 +42,7 @@ export const PlanFields = z.object({
   title: shortText(120),
   note: longText(2000).default(''),
   /** the score to aim for, in the coach’s words */
-  aim: z.string().trim().max(200).default(''),
+  aim: longText(200).default(''),
   blocks: z.array(Block).max(limits.blocksPerSession).default([]),
 });
 export type PlanFields = z.infer<typeof PlanFields>;

@@ -68,6 +68,12 @@ describe('a new movement', () => {
     expect(Object.keys(body.error.fields)).toEqual(['kitNeeded.0.anyOf.1.kitItemId']);
   });
 
+  it('refuses text that no database keeps, at its field', async () => {
+    const cautions = [{ say: 'Clear the floor.', more: 'a\u0000b' }];
+    const { body } = await editor.post(at('movements')).send(fields('Nul hop', { cautions })).expect(400);
+    expect(Object.keys(body.error.fields)).toEqual(['cautions.0.more']);
+  });
+
   it('is not a member’s to make', async () => {
     await member.post(at('movements')).send(fields('Handstand')).expect(403);
   });
@@ -189,6 +195,21 @@ describe('the dictionary', () => {
     expect(body.nextCursor).toBeNull();
     const nothing = await reader.get(path('movements')).query({ q: 'xylophone' }).expect(200);
     expect(nothing.body.items).toEqual([]);
+  });
+
+  it('understands “without”: what does not ask for that kit', async () => {
+    const other = await makeTeamOfFour();
+    const rope = await makeKitItem(other.team, 'rope');
+    const band = await makeKitItem(other.team, 'band');
+    const either = [{ anyOf: [...needs(rope), ...needs(band)].flatMap(({ anyOf }) => anyOf) }];
+    await makeMovement(other.team, 'Rope skip', { kitNeeded: needs(rope) });
+    await makeMovement(other.team, 'Side skip');
+    await makeMovement(other.team, 'Pulled skip', { kitNeeded: either });
+    const browser = await api.signedIn(other.member);
+    const found = async (q: string) =>
+      namesIn((await browser.get(at('movements', other)).query({ q }).expect(200)).body).sort();
+    expect(await found('skip without a rope')).toEqual(['Pulled skip', 'Side skip']);
+    expect(await found('no rope')).toEqual(['Pulled skip', 'Side skip']);
   });
 
   it('knows a new movement, a new name and new kit at once', async () => {

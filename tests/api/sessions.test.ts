@@ -161,6 +161,24 @@ describe('a planned session', () => {
   });
 });
 
+describe('text that no database keeps', () => {
+  it('is refused at its field: NUL', async () => {
+    const made = await create();
+    const nul = 'a\u0000b';
+    const load = { kg: 16, typed: nul };
+    const blocks = [block({ title: nul, note: nul, lines: [line(row, { note: nul, dose: { ...reps(3), load } })] })];
+    expect((await faultsOf(save(made.id, 1, { aim: nul, note: nul, title: nul, blocks }))).sort()).toEqual([
+      'aim',
+      'blocks.0.lines.0.dose.load.typed',
+      'blocks.0.lines.0.note',
+      'blocks.0.note',
+      'blocks.0.title',
+      'note',
+      'title',
+    ]);
+  });
+});
+
 describe('saving a plan', () => {
   it('keeps what stays, moves a line to another block, and removes what is gone', async () => {
     const [first, second] = [block(), block({ title: 'Second', lines: [line(hop)] })];

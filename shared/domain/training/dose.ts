@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { longText } from '../values';
 import { figure, figurePattern, readFigure, saidInMinutes, secondsPerUnit, secondsText } from './figures';
 
 /** How much of a movement is done: "10 reps", "6 / side", "30 s", "200 m", "12 cal", with a load and a tempo where they matter. */
@@ -9,7 +10,7 @@ export type DoseUnit = (typeof doseUnits)[number];
 export const Load = z.object({
   kg: z.number().positive().max(1000),
   /** as the coach typed it, "53 lb", so that nobody has to read a converted figure */
-  typed: z.string().max(20),
+  typed: longText(20),
 });
 export type Load = z.infer<typeof Load>;
 
