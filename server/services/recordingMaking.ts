@@ -116,7 +116,8 @@ export async function giveUp(of: OfRecording, step: MakingStep, failure: Recordi
     if (!recording) return;
     await failStep(of, step);
     const { teamId, recordingId } = of;
-    if (recording.state !== 'making' || step === 'poster' || step === 'chapterPictures') return;
+    if (recording.state === 'ready' || recording.state === 'failed') return;
+    if (step === 'poster' || step === 'chapterPictures') return;
     await recording.update({ state: 'failed', failure, ...(failure.retry ? {} : { originalKey: null }) });
     if (!failure.retry) {
       await RecordingAsset.destroy({ where: of });
@@ -125,7 +126,7 @@ export async function giveUp(of: OfRecording, step: MakingStep, failure: Recordi
         prefixes: [originalsPrefix(teamId, recordingId), madePrefix(teamId, recordingId)],
       });
     }
-    await notify(recording, 'recordingFailed', `“${recording.title}” cannot be shown yet. ${failure.message}`);
+    await notify(recording, 'recordingFailed', `“${recording.title}” could not be prepared. ${failure.message}`);
     await tell(teamId, { type: 'recording', recordingId, state: 'failed' });
   });
 }

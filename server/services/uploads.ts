@@ -51,7 +51,7 @@ export async function createUpload(actor: Actor, file: AnnouncedFile): Promise<U
   const storeUploadId = await store().openUpload(objectKey, storedType(file.contentType));
   try {
     return await inTransaction(async () => {
-      await addRecording(actor, recordingId, file, session);
+      const recording = await addRecording(actor, recordingId, file, session);
       const upload = await Upload.create({
         teamId: actor.team.id,
         id,
@@ -63,7 +63,7 @@ export async function createUpload(actor: Actor, file: AnnouncedFile): Promise<U
         sizeBytes: file.sizeBytes,
         ...partsOfFile(file.sizeBytes),
       });
-      await audit(actor, 'upload.started', { type: 'recording', id: recordingId }, { fileName: file.fileName });
+      await audit(actor, 'upload.started', { type: 'recording', id: recordingId }, { fileName: recording.fileName });
       await tell(actor.team.id, { type: 'recording', recordingId, state: 'uploading' });
       return upload;
     });

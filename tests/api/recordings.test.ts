@@ -1,10 +1,13 @@
 import { randomUUID } from 'node:crypto';
+import { QueryTypes } from 'sequelize';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { probeRecording, removeObjects } from '../../server/jobs/definitions';
 import { database } from '../../server/models/database';
 import { ChapterRow } from '../../server/models/marks';
 import { Recording } from '../../server/models/recordings';
 import { Block } from '../../server/models/sessions';
+import { becomeReady } from '../../server/services/recordingMaking';
+import { refreshSearchOf } from '../../server/services/searchIndex';
 import { madePrefix, originalsPrefix } from '../../storage/keys';
 import { type Api, makeTeamOfFour, queuedJobs, startApi, type TeamOfFour, type Visitor } from '../support/api';
 import { makeReadyRecording, makeSession } from '../support/footage';
@@ -130,6 +133,43 @@ describe('changing', () => {
         .expect(400);
       expect(Object.keys(body.error.fields)).toEqual(Object.keys(change));
     }
+  });
+});
+
+describe('what members find', () => {
+  const visibility = async (recordingId: string) => {
+    const rows = await database().query<{ visibility: number }>(
+      'select visibility from chapter_search where recording_id = :recordingId',
+      { replacements: { recordingId }, type: QueryTypes.SELECT },
+    );
+    return rows.map((row) => row.visibility);
+  };
+
+  it('follows the recording: hidden until it plays, and with its session', async () => {
+    const [shown, draft] = await Promise.all([
+      makeSession(ours.team.id, { published: true }),
+      makeSession(ours.team.id),
+    ]);
+    const recording = await makeReadyRecording(ours.team.id, { sessionId: shown.id });
+    const { id } = recording;
+    await recording.update({ state: 'making' });
+    await ChapterRow.create({
+      teamId: ours.team.id,
+      id: randomUUID(),
+      recordingId: id,
+      startMs: 0,
+      endMs: 1000,
+      kind: 'demo',
+      title: 'Hinge',
+    });
+    await refreshSearchOf({ recordingId: id });
+    expect(await visibility(id)).toEqual([1]);
+    await becomeReady(recording);
+    expect(await visibility(id)).toEqual([0]);
+    await coach.patch(`${path}/${id}`).send({ sessionId: draft.id, version: 1 }).expect(200);
+    expect(await visibility(id)).toEqual([1]);
+    await coach.delete(`${path}/${id}`).expect(200);
+    expect(await visibility(id)).toEqual([]);
   });
 });
 

@@ -65,6 +65,12 @@ describe('announcing a file', () => {
     });
   });
 
+  it('keeps of a name what one line of plain text can hold', async () => {
+    const { recordingId } = await announce(coach, slug, 10, { name: 'C:\\clips\\a\u0000b\u0007_two-handed swing.MOV' });
+    const recording = await Recording.findByPk(recordingId);
+    expect(recording).toMatchObject({ fileName: 'ab_two-handed swing.MOV', title: 'ab two handed swing' });
+  });
+
   it.each([
     ['empty', 0],
     ['larger than anything taken', limits.recordingBytes + 1],
