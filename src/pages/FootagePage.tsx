@@ -31,6 +31,11 @@ export function FootagePage() {
     <>
       <PageTitle
         title="Footage"
+        meta={
+          mayUpload && (
+            <span className="pointer-coarse:hidden">Choose files with Upload, or drop them anywhere on this page.</span>
+          )
+        }
         actions={
           mayUpload && (
             <FileButton look="go" choose="several" accept={acceptedFiles} label="Recordings to upload" onFiles={take}>

@@ -1,3 +1,4 @@
+import { clsx } from 'clsx';
 import { type ReactNode, useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Recording } from '../../../shared/contracts/recordings';
@@ -28,11 +29,11 @@ export function RecordingRow({ team, recording, upload }: Props) {
       : []),
   ];
   return (
-    <li className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-3 gap-y-2 border-b border-line py-3 sm:gap-x-4 lg:grid-cols-[auto_minmax(0,1fr)_auto]">
+    <li className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-3 border-b border-line py-3 sm:gap-x-4 lg:grid-cols-[auto_minmax(0,1fr)_auto]">
       <Still
         src={posterUrl}
         length={durationMs === null ? undefined : formatMs(durationMs)}
-        className="w-23 min-[400px]:w-32 sm:w-37"
+        className="w-23 min-[400px]:w-32 sm:row-span-2 sm:w-37"
       />
       <div className="min-w-0">
         <h2 className="text-md leading-tight font-extrabold wrap-anywhere">
@@ -49,30 +50,37 @@ export function RecordingRow({ team, recording, upload }: Props) {
         </p>
         <p className="text-sm text-ink2">{factsOf(recording)}</p>
       </div>
-      <div className="col-span-2 max-w-xl min-w-0 empty:hidden lg:col-span-1 lg:col-start-2">
-        <RecordingState team={team} recording={recording} upload={upload} />
-      </div>
-      <div className="col-span-2 flex flex-wrap items-center gap-2 lg:col-span-1 lg:col-start-3 lg:row-span-2 lg:row-start-1 lg:self-start">
-        {isReady && (
-          <>
-            <ButtonLink size="small" to={teamPath(team, 'footage', id)} aria-label={`Mark ${title}`}>
-              Mark
-            </ButtonLink>
-            <ButtonLink size="small" to={teamPath(team, 'words', id)} aria-label={`Words of ${title}`}>
-              Words
-            </ButtonLink>
-            <ButtonLink size="small" to={teamPath(team, 'watch', id)} aria-label={`Watch ${title}`}>
-              Watch
-            </ButtonLink>
-          </>
-        )}
-        <Menu
-          label={<Icon name="more" size={18} />}
-          name={`More for ${title}`}
-          size="small"
-          items={items}
-          className="ms-auto lg:ms-0"
-        />
+      <div className="col-span-2 mt-2 flex flex-wrap items-center gap-2 sm:col-span-1 sm:col-start-2 lg:contents">
+        <div className="max-w-xl min-w-0 grow basis-52 empty:hidden lg:col-start-2 lg:mt-2">
+          <RecordingState team={team} recording={recording} upload={upload} />
+        </div>
+        <div
+          className={clsx(
+            'flex flex-wrap items-center gap-2 lg:col-start-3 lg:row-span-2 lg:row-start-1 lg:self-start',
+            isReady ? 'grow' : 'ms-auto flex-none',
+          )}
+        >
+          {isReady && (
+            <>
+              <ButtonLink size="small" to={teamPath(team, 'footage', id)} aria-label={`Mark ${title}`}>
+                Mark
+              </ButtonLink>
+              <ButtonLink size="small" to={teamPath(team, 'words', id)} aria-label={`Words of ${title}`}>
+                Words
+              </ButtonLink>
+              <ButtonLink size="small" to={teamPath(team, 'watch', id)} aria-label={`Watch ${title}`}>
+                Watch
+              </ButtonLink>
+            </>
+          )}
+          <Menu
+            label={<Icon name="more" size={18} />}
+            name={`More for ${title}`}
+            size="small"
+            items={items}
+            className="ms-auto"
+          />
+        </div>
       </div>
       {open === 'change' && <ChangeRecording team={team} recording={recording} onClose={() => setOpen('none')} />}
       {open === 'remove' && <RemoveRecording team={team} recording={recording} onClose={() => setOpen('none')} />}

@@ -24,10 +24,11 @@ export function UploadTray({ team }: { team: string }) {
 
 function OpenTray({ uploads }: { uploads: readonly Upload[] }) {
   const tray = useRef<HTMLElement>(null);
-  const [rows, setRows] = useState<'shown' | 'hidden'>('shown');
+  const [chosen, setChosen] = useState<'shown' | 'hidden' | null>(null);
   const height = useRoomAtFoot(tray);
   const underWay = uploads.filter(isUnderWay);
   const done = uploads.filter((upload) => upload.state === 'done');
+  const rows = chosen ?? ownRows(uploads);
   return (
     <>
       {/* the page ends above the tray, so that its last lines can be scrolled clear of it */}
@@ -51,14 +52,14 @@ function OpenTray({ uploads }: { uploads: readonly Upload[] }) {
             size="small"
             look="quiet"
             aria-expanded={rows === 'shown'}
-            onClick={() => setRows(rows === 'shown' ? 'hidden' : 'shown')}
+            onClick={() => setChosen(rows === 'shown' ? 'hidden' : 'shown')}
           >
             {rows === 'shown' ? 'Fold' : 'Show'}
             <Icon name="chevron" size={14} className={rows === 'shown' ? '' : 'rotate-180'} />
           </Button>
         </div>
         {rows === 'shown' && (
-          <ul className="max-h-[min(40dvh,22rem)] overflow-y-auto overscroll-contain pb-1">
+          <ul className="max-h-[min(40dvh,22rem)] gap-x-10 overflow-y-auto overscroll-contain pb-1 md:grid md:grid-cols-2 2xl:grid-cols-3">
             {uploads.map((upload) => (
               <UploadRow key={upload.id} upload={upload} />
             ))}
@@ -67,6 +68,12 @@ function OpenTray({ uploads }: { uploads: readonly Upload[] }) {
       </section>
     </>
   );
+}
+
+/** What nobody has to look at is folded by itself: many files on a phone, and what has all arrived. */
+function ownRows(uploads: readonly Upload[]): 'shown' | 'hidden' {
+  if (uploads.length <= 1 || uploads.some((upload) => upload.state === 'failed')) return 'shown';
+  return uploads.some(isUnderWay) && window.matchMedia('(width >= 48rem)').matches ? 'shown' : 'hidden';
 }
 
 /** Tells the page how high the tray is: toasts, sticky actions and what gets the focus keep clear of it through `--nav`. */
