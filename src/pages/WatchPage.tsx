@@ -3,6 +3,7 @@ import { useParams } from 'react-router-dom';
 import { ErrorPage } from '../components/ErrorPage';
 import { ErrorPanel } from '../components/ErrorPanel';
 import { GoLink } from '../components/GoButton';
+import { PageTitle } from '../components/PageTitle';
 import { watchQuery } from '../features/player/api';
 import { NotReady } from '../features/player/NotReady';
 import { WatchedRecording } from '../features/player/WatchedRecording';
@@ -29,7 +30,8 @@ export function WatchPage() {
       </ErrorPage>
     );
   return (
-    <div className="pt-6">
+    <div className="space-y-4 pt-6">
+      <PageTitle title="Watch" />
       <ErrorPanel
         title="The recording did not arrive."
         message={message}

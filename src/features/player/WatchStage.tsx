@@ -40,7 +40,8 @@ export function WatchStage({ team, watch, skips, playhead, moves, start, caption
       aria-label="Player"
       className="stage"
       data-controls={controls}
-      style={{ '--shape': watch.width / watch.height } as CSSProperties}
+      // an upright picture stands in the middle of a lying one's place
+      style={{ '--shape': Math.max(16 / 9, watch.width / watch.height) } as CSSProperties}
       onKeyDown={(event) => {
         touch();
         onKeyDown(event);

@@ -75,7 +75,7 @@ export function WatchedRecording({ team, watch }: { team: string; watch: Watch }
           captions={captions}
           picture={picture}
         />
-        <div className="watch-switches lg:mt-3">
+        <div className="watch-switches">
           <Switches
             playhead={playhead}
             loop={loop}
@@ -96,7 +96,7 @@ export function WatchedRecording({ team, watch }: { team: string; watch: Watch }
             actions={mayEdit && <DeskLinks team={team} recordingId={watch.recordingId} />}
           />
         </div>
-        <div className="watch-lists space-y-6 lg:mt-5">
+        <div className="watch-lists space-y-6">
           {movement && movement.cautions.length > 0 && (
             <div className="space-y-2">
               <MovementCautions movement={movement} />
