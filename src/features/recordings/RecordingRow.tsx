@@ -56,7 +56,7 @@ export function RecordingRow({ team, recording, upload }: Props) {
         </div>
         <div
           className={clsx(
-            'flex flex-wrap items-center gap-2 lg:col-start-3 lg:row-span-2 lg:row-start-1 lg:self-start',
+            'flex flex-wrap items-center gap-x-1 gap-y-2 min-[360px]:gap-x-2 lg:col-start-3 lg:row-span-2 lg:row-start-1 lg:self-start',
             isReady ? 'grow' : 'ms-auto flex-none',
           )}
         >

@@ -36,7 +36,7 @@ export function DropZone({ onFiles }: { onFiles: (files: File[]) => void }) {
 
   if (held === 'away') return null;
   return (
-    <div className="pointer-events-none fixed inset-0 z-50 flex items-center justify-center bg-ground/85 p-4">
+    <div className="pointer-events-none fixed inset-0 z-50 flex items-center justify-center bg-ground/95 p-4">
       <div className="flex size-full flex-col items-center justify-center gap-3 rounded border-4 border-dashed border-ink text-center">
         <Icon name="upload" size={44} />
         <p className="text-lg font-extrabold">Let go to upload</p>

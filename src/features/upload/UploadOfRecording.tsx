@@ -8,8 +8,8 @@ export function UploadOfRecording({ team, recordingId }: { team: string; recordi
   if (!upload)
     return (
       <p className="text-sm text-ink2">
-        Its file is on its way from another page or device. If that page was closed, remove this one and upload it
-        again.
+        Its file is on its way from another page or device. If that page was closed, upload the file again; this entry
+        can then be removed.
       </p>
     );
   const { state, fault, arrivedBytes, sizeBytes } = upload;
