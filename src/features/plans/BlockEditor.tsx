@@ -48,7 +48,7 @@ export function BlockEditor({ block, place, of, edits, library }: Props) {
           <IconButton icon="trash" label="Remove the block" look="quiet" onClick={() => edits.removeBlock(id)} />
         </Toolbar>
       </div>
-      <div className="mt-1 grid gap-x-2.5 gap-y-2 @[30rem]:grid-cols-2 @[43rem]:grid-cols-[9.5rem_minmax(0,1fr)_minmax(0,1.2fr)]">
+      <div className="mt-1 grid grid-cols-[8.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-2 @[43rem]:grid-cols-[9.5rem_minmax(0,1fr)_minmax(0,1.2fr)]">
         <div data-part="kind">
           <SelectField
             label="Kind"
@@ -70,7 +70,7 @@ export function BlockEditor({ block, place, of, edits, library }: Props) {
         <SchemeField
           label="Scheme"
           optional
-          className="@[30rem]:col-span-2 @[43rem]:col-span-1"
+          className="col-span-2 @[43rem]:col-span-1"
           value={block.scheme}
           onChange={(scheme) => edits.setBlock(id, { scheme })}
         />

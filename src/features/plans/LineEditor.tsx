@@ -24,7 +24,7 @@ type Props = {
 
 /** One grid for the lines and for the names of their columns. */
 export const lineGrid =
-  '@[43rem]:grid-cols-[minmax(10rem,1.3fr)_minmax(6.5rem,0.7fr)_minmax(6rem,0.6fr)_minmax(7rem,1fr)_calc(4*var(--target))]';
+  '@[43rem]:grid-cols-[minmax(9rem,1.2fr)_minmax(8rem,1.1fr)_6.5rem_minmax(7rem,0.9fr)_calc(4*var(--target-small))]';
 
 /** A line of a block: movement and dose to type into, what shows it, what to do instead. Enter goes on to the next. */
 export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLast, edits, library }: Props) {
@@ -64,11 +64,15 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
             onChange={(dose) => edits.setLine(id, { dose })}
           />
         </div>
-        <Toolbar label={`Change ${called}`} className="flex self-end @[43rem]:order-last @[43rem]:self-start">
+        <Toolbar
+          label={`Change ${called}`}
+          className="flex self-end @[43rem]:order-last @[43rem]:mt-0.5 @[43rem]:self-start"
+        >
           <IconButton
             icon="chevron"
             label="Move up"
             look="quiet"
+            size="small"
             className="rotate-180"
             disabled={isFirst}
             data-part="up"
@@ -78,6 +82,7 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
             icon="chevron"
             label="Move down"
             look="quiet"
+            size="small"
             disabled={isLast}
             data-part="down"
             onClick={() => edits.moveLine(id, 1)}
@@ -86,10 +91,17 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
             icon="swap"
             label="Note, and what to do instead"
             look="quiet"
+            size="small"
             aria-expanded={more === 'open'}
             onClick={() => setMore(more === 'open' ? 'closed' : 'open')}
           />
-          <IconButton icon="trash" label="Remove the line" look="quiet" onClick={() => edits.removeLine(id)} />
+          <IconButton
+            icon="trash"
+            label="Remove the line"
+            look="quiet"
+            size="small"
+            onClick={() => edits.removeLine(id)}
+          />
         </Toolbar>
         <div className="col-span-full text-sm @[43rem]:col-span-1 @[43rem]:pt-2.5">
           {line.movementId !== null && (

@@ -157,8 +157,8 @@ function LackOptions({ needed, library }: { needed: readonly Need[]; library: Pl
       {ids.size > 0 && (
         <optgroup label="This movement needs">{items.filter(({ id }) => ids.has(id)).map(option)}</optgroup>
       )}
-      <option value="space">no space</option>
-      <option value="ability">not able to</option>
+      <option value="space">little space</option>
+      <option value="ability">something easier</option>
       <optgroup label="Other kit">{items.filter(({ id }) => !ids.has(id)).map(option)}</optgroup>
     </>
   );

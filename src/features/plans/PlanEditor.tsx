@@ -1,13 +1,13 @@
 import { blockKinds } from '../../../shared/domain/words';
 import { limits } from '../../../shared/limits';
+import { Button } from '../../components/Button';
 import { EmptyState } from '../../components/EmptyState';
-import { Icon } from '../../components/Icon';
-import { Menu } from '../../components/Menu';
 import { TapeStrip } from '../../components/TapeStrip';
 import { BlockEditor } from './BlockEditor';
 import { blockWords } from './blockWords';
 import { PlanHead } from './PlanHead';
 import type { PlanLibrary } from './planLibrary';
+import { Toolbar } from './Toolbar';
 import type { PlanEdits } from './usePlanEdits';
 import type { WrittenPlan } from './writtenPlan';
 
@@ -28,27 +28,17 @@ export function PlanEditor({ plan, edits, library }: { plan: WrittenPlan; edits:
       ))}
       <div data-of="plan">
         {blocks.length < limits.blocksPerSession ? (
-          <span data-part="add">
-            <Menu
-              look="plain"
-              align="start"
-              label={
-                <>
-                  <Icon name="add" size={16} />
-                  Add a block
-                </>
-              }
-              items={blockKinds.map((kind) => ({
-                label: (
-                  <span className="flex items-center gap-3">
-                    <TapeStrip kind={kind} className="w-12" />
-                    {blockWords[kind]}
-                  </span>
-                ),
-                onSelect: () => edits.addBlock(kind),
-              }))}
-            />
-          </span>
+          <>
+            <h3 className="mb-1.5 text-sm font-bold">Add a block</h3>
+            <Toolbar label="Add a block" className="flex flex-wrap gap-2">
+              {blockKinds.map((kind) => (
+                <Button key={kind} size="small" data-part="add" onClick={() => edits.addBlock(kind)}>
+                  <TapeStrip kind={kind} className="w-8" />
+                  {blockWords[kind]}
+                </Button>
+              ))}
+            </Toolbar>
+          </>
         ) : (
           <p className="text-sm text-ink2">A session has at most {limits.blocksPerSession} blocks.</p>
         )}

@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom';
 import type { SessionInList } from '../../../shared/contracts/sessions';
 import { TapeStrip } from '../../components/TapeStrip';
-import { formatCount, formatDay, formatList } from '../../lib/format';
+import { formatCount, formatDate, formatDay, formatList } from '../../lib/format';
 import { teamPath } from '../../lib/session';
 import { blockWords } from './blockWords';
 
@@ -12,7 +12,9 @@ export function SessionRow({ team, session, today }: Props) {
   const { date, title, state, coach, blockKinds, movementCount, shownCount, recordingCount } = session;
   return (
     <li className="relative grid items-center gap-x-5 gap-y-1 border-b border-line py-2.5 hover:bg-raised sm:grid-cols-[9rem_minmax(0,1fr)] lg:grid-cols-[9rem_minmax(12rem,1fr)_minmax(9rem,14rem)_8rem_13rem]">
-      <span className="text-sm text-ink2 lg:text-base">{formatDay(date, today)}</span>
+      <span className="text-sm text-ink2 lg:text-base">
+        {date === today ? formatDate(date) : formatDay(date, today)}
+      </span>
       <span className="min-w-0">
         <Link
           to={teamPath(team, 'sessions', session.id)}
@@ -36,19 +38,17 @@ export function SessionRow({ team, session, today }: Props) {
           </>
         )}
       </span>
-      <span className="text-sm sm:col-start-2 lg:col-auto">
-        {recordingCount === 0 ? (
-          <span className="text-ink2">no recording</span>
-        ) : (
-          formatCount(recordingCount, 'recording', 'recordings')
-        )}
-      </span>
-      <span className="text-sm text-ink2 sm:col-start-2 lg:col-auto">
-        {movementCount === 0
-          ? 'no movement planned'
-          : movementCount === shownCount
-            ? 'every movement has a demo'
-            : `${shownCount} of ${movementCount} movements have a demo`}
+      <span className="flex flex-wrap gap-x-3 text-sm text-ink2 sm:col-start-2 lg:contents">
+        <span className={recordingCount === 0 ? undefined : 'text-ink'}>
+          {recordingCount === 0 ? 'no recording' : formatCount(recordingCount, 'recording', 'recordings')}
+        </span>
+        <span>
+          {movementCount === 0
+            ? 'no movement planned'
+            : movementCount === shownCount
+              ? 'every movement has a demo'
+              : `${shownCount} of ${movementCount} movements have a demo`}
+        </span>
       </span>
     </li>
   );

@@ -19,10 +19,10 @@ export const demoOf = ({ movement, moments }: MovementFacts): Moment | undefined
     (moment) => (moment.kind === 'demo' || moment.kind === 'substitution') && moment.movement?.id === movement.id,
   );
 
-/** How what is missing is said: “no rope”, “no space”. */
+/** How what is missing is said: “no rope”, “little space”. */
 export function lackText(lack: { missing: MissingThing; missingKitItemId: string | null }, kit: KitById): string {
-  if (lack.missing === 'space') return 'no space';
-  if (lack.missing === 'ability') return 'not able to';
+  if (lack.missing === 'space') return 'little space';
+  if (lack.missing === 'ability') return 'easier';
   return (lack.missingKitItemId !== null && kit.get(lack.missingKitItemId)?.withoutText) || 'missing kit';
 }
 

@@ -12,17 +12,14 @@ export type PlanEdits = ReturnType<typeof usePlanEdits>;
 /** What can be given the focus after an edit: a part of a block or of a line. */
 type Part = 'kind' | 'movement' | 'dose' | 'up' | 'down' | 'add';
 
-const find = (id: string, part: Part) =>
-  document.querySelector<HTMLElement>(
-    `[data-of="${id}"] [data-part="${part}"] :is(input, select, button), [data-of="${id}"] [data-part="${part}"]`,
-  );
-
 /** Gives the focus to the first of these parts that is there and works. */
 function focusOn(...parts: [id: string, part: Part][]): void {
   for (const [id, part] of parts) {
-    const element = find(id, part);
-    if (!element?.matches(':is(input, select, button):enabled')) continue;
-    element.focus();
+    const controls = ':is(input, select, button):enabled';
+    const at = `[data-of="${id}"] [data-part="${part}"]`;
+    const control = document.querySelector<HTMLElement>(`${at}${controls}, ${at} ${controls}`);
+    if (!control) continue;
+    control.focus();
     return;
   }
 }
