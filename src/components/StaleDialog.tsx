@@ -12,6 +12,8 @@ type Props<Item> = {
   of: string;
   differences: readonly Difference<Item>[];
   theirs: readonly Item[];
+  /** what becomes of the version that is not kept, where no history keeps it */
+  note?: string;
   /** an entry in a line or two */
   show: (item: Item) => ReactNode;
   onDecide: (choice: 'theirs' | 'mine' | { both: Item[] }) => void;
@@ -20,8 +22,11 @@ type Props<Item> = {
 /** Enough to decide by; the rest is counted. */
 const shownAtOnce = 60;
 
+const keptInHistory = 'Their version stays in the history whatever you choose; taking theirs can be undone here.';
+
 /** Two people saved: what I changed beside what they changed, and the three ways on. */
-export function StaleDialog<Item>({ open, onClose, of, differences, theirs, show, onDecide }: Props<Item>) {
+export function StaleDialog<Item>(props: Props<Item>) {
+  const { open, onClose, of, differences, theirs, note = keptInHistory, show, onDecide } = props;
   const [chosen, setChosen] = useState<(Side | undefined)[]>([]);
   const conflicts = differences.filter(({ conflict }) => conflict).length;
   const open_ = differences.filter(({ conflict }, at) => conflict && !chosen[at]).length;
@@ -49,7 +54,7 @@ export function StaleDialog<Item>({ open, onClose, of, differences, theirs, show
         {conflicts === 0
           ? 'You changed different things, so both can be kept.'
           : `${conflicts === 1 ? 'One entry was' : `${conflicts} entries were`} changed by both of you: choose a side there to keep the rest of both.`}{' '}
-        Their version stays in the history whatever you choose; taking theirs can be undone here.
+        {note}
       </p>
       <div className="mt-3 grid grid-cols-2 gap-x-3 border-b border-line pb-1 text-xs font-bold text-ink2">
         <span>Yours</span>
