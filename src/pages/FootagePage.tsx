@@ -33,7 +33,9 @@ export function FootagePage() {
         title="Footage"
         meta={
           mayUpload && (
-            <span className="pointer-coarse:hidden">Choose files with Upload, or drop them anywhere on this page.</span>
+            <span className="max-md:hidden pointer-coarse:hidden">
+              Choose files with Upload, or drop them anywhere on this page.
+            </span>
           )
         }
         actions={

@@ -114,5 +114,5 @@ function factsOf({ state, chapterCount, captionLineCount, sizeBytes, coach }: Re
   const chapters = chapterCount === 0 ? 'no chapters yet' : formatCount(chapterCount, 'chapter', 'chapters');
   const lines =
     captionLineCount === 0 ? 'no captions yet' : formatCount(captionLineCount, 'caption line', 'caption lines');
-  return [...(isWorkedOn ? [chapters, lines] : []), formatBytes(sizeBytes), coach?.name].filter(Boolean).join(' · ');
+  return [...(isWorkedOn ? [chapters, lines] : [formatBytes(sizeBytes)]), coach?.name].filter(Boolean).join(' · ');
 }

@@ -14,6 +14,18 @@ export function RemoveRecording({ team, recording, onClose }: Props) {
     ...(chapterCount > 0 ? [formatCount(chapterCount, 'chapter', 'chapters')] : []),
     ...(captionLineCount > 0 ? [formatCount(captionLineCount, 'caption line', 'caption lines')] : []),
   ];
+  const confirm = async () => {
+    try {
+      await remove.mutateAsync(id);
+    } catch {
+      // said in the window
+      return;
+    }
+    announce(`“${title}” is removed.`);
+    onClose();
+    // its row, and the button that had the focus, are gone
+    document.getElementById('main')?.focus({ preventScroll: true });
+  };
   return (
     <ConfirmDialog
       open
@@ -22,14 +34,7 @@ export function RemoveRecording({ team, recording, onClose }: Props) {
       busy={remove.isPending ? 'Removing' : undefined}
       error={remove.error?.message}
       onClose={onClose}
-      onConfirm={() =>
-        remove.mutate(id, {
-          onSuccess: () => {
-            announce(`“${title}” is removed.`);
-            onClose();
-          },
-        })
-      }
+      onConfirm={() => void confirm()}
     >
       <p>
         The file and everything made from it go{marks.length > 0 && `, with ${formatList(marks)} and their cues`}. This

@@ -11,7 +11,7 @@ import { progressWords } from './uploadWords';
 export function UploadRow({ upload }: { upload: Upload }) {
   return (
     <li className="flex flex-wrap items-center gap-x-4 gap-y-1 border-t border-line py-2">
-      <div className="min-w-0 grow basis-56">
+      <div className="min-w-0 grow basis-40">
         <UploadWords upload={upload} />
       </div>
       <div className="ms-auto flex flex-none items-center gap-2">

@@ -10,6 +10,8 @@ import { dismissUploads, keepOnlyUploadsOf } from './uploader';
 import { isUnderWay, type Upload, useUploads } from './uploadList';
 import { shareOf, summaryOf } from './uploadWords';
 
+const foldId = 'uploads-fold';
+
 /** At the foot of the desk while something is on its way, stopped, or has just arrived. */
 export function UploadTray({ team }: { team: string }) {
   const personId = useMe()?.id;
@@ -19,6 +21,7 @@ export function UploadTray({ team }: { team: string }) {
   }, [personId]);
   useFreshRecordings(team, uploads);
   useAnnounceUploads(uploads);
+  useFocusAfterRow(uploads.length);
   return uploads.length > 0 ? <OpenTray uploads={uploads} /> : null;
 }
 
@@ -51,6 +54,7 @@ function OpenTray({ uploads }: { uploads: readonly Upload[] }) {
           <Button
             size="small"
             look="quiet"
+            id={foldId}
             aria-expanded={rows === 'shown'}
             onClick={() => setChosen(rows === 'shown' ? 'hidden' : 'shown')}
           >
@@ -94,6 +98,18 @@ function useRoomAtFoot(tray: { current: HTMLElement | null }): number {
     };
   }, [tray]);
   return height;
+}
+
+/** A row that goes takes the focus with it: it moves to the tray's own button, and from the last row to the page. */
+function useFocusAfterRow(count: number): void {
+  const last = useRef(count);
+  useEffect(() => {
+    const isFewer = count < last.current;
+    last.current = count;
+    if (!isFewer || document.activeElement !== document.body) return;
+    const next = document.getElementById(foldId) ?? document.getElementById('main');
+    next?.focus({ preventScroll: true });
+  }, [count]);
 }
 
 /** A recording that was announced, has arrived or was taken back changes what the pages list. */
