@@ -10,6 +10,7 @@ import { FoundMovements } from '../features/dictionary/FoundMovements';
 import { kitById } from '../features/dictionary/kitWords';
 import { MovementRows } from '../features/dictionary/MovementRows';
 import { PatternChips } from '../features/dictionary/PatternChips';
+import { useAddress } from '../features/dictionary/useAddress';
 import { useDictionaryAddress } from '../features/dictionary/useDictionaryAddress';
 import { useTeam } from '../lib/session';
 
@@ -18,7 +19,7 @@ export function DictionaryPage() {
   const { slug } = useTeam();
   const { data: items } = useSuspenseQuery(kitQuery(slug));
   const kit = useMemo(() => kitById(items), [items]);
-  const address = useDictionaryAddress();
+  const address = useDictionaryAddress(useAddress());
   const { q, pattern } = address;
   return (
     <div className="pt-3 pb-8">

@@ -11,6 +11,7 @@ import { kitById } from '../features/dictionary/kitWords';
 import { MergeBar } from '../features/dictionary/MergeBar';
 import { MovementTable } from '../features/dictionary/MovementTable';
 import { NoMovements } from '../features/dictionary/NoMovements';
+import { useAddress } from '../features/dictionary/useAddress';
 import { useDictionaryAddress } from '../features/dictionary/useDictionaryAddress';
 import { useMergeChoice } from '../features/dictionary/useMergeChoice';
 import { teamPath, useTeam } from '../lib/session';
@@ -21,8 +22,9 @@ export function MovementsPage() {
   const navigate = useNavigate();
   const { data: items } = useSuspenseQuery(kitQuery(slug));
   const kit = useMemo(() => kitById(items), [items]);
-  const address = useDictionaryAddress();
-  const merging = useMergeChoice();
+  const place = useAddress();
+  const address = useDictionaryAddress(place);
+  const merging = useMergeChoice(place);
   return (
     <div className="space-y-4">
       <PageTitle

@@ -1,3 +1,6 @@
+/** Frames in which the lines are made anew at the latest: half a second. */
+const mostFrames = 30;
+
 /**
  * Runs what makes a form's lines anew, and puts the focus and the writing mark back where they were.
  * @param form the form, or null while there is none
@@ -7,11 +10,14 @@ export function keepPlace(form: HTMLFormElement | null, change: () => void): voi
   const name = at instanceof HTMLElement && form?.contains(at) ? at.getAttribute('name') : null;
   const mark = at instanceof HTMLInputElement || at instanceof HTMLTextAreaElement ? at.selectionStart : null;
   change();
-  if (!name) return;
-  requestAnimationFrame(() => {
+  if (!name || !at) return;
+  const look = (framesLeft: number) => {
+    if (at.isConnected) return framesLeft > 0 && requestAnimationFrame(() => look(framesLeft - 1));
+    // the person went elsewhere meanwhile
+    if (document.activeElement !== document.body) return;
     const same = form?.querySelector<HTMLInputElement>(`[name="${CSS.escape(name)}"]`);
-    if (!same || same === document.activeElement) return;
-    same.focus();
-    if (mark !== null) same.setSelectionRange(mark, mark);
-  });
+    same?.focus();
+    if (mark !== null) same?.setSelectionRange(mark, mark);
+  };
+  requestAnimationFrame(() => look(mostFrames));
 }

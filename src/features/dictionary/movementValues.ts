@@ -51,7 +51,7 @@ export function emptyValues(name: string): MovementValues {
     otherNames: '',
     pattern: '' as MovementFields['pattern'],
     kitNeeded: [],
-    points: [{ text: '' }],
+    points: [],
     faults: [],
     cautions: [],
   };

@@ -1,6 +1,6 @@
 import { useEffect, useRef, useState } from 'react';
-import { useSearchParams } from 'react-router-dom';
 import { type Pattern, patterns } from '../../../shared/domain/words';
+import type { Address } from './useAddress';
 
 /** A pause in the typing after which it is looked for. */
 const settledAfterMs = 180;
@@ -18,25 +18,14 @@ export type DictionaryAddress = {
 };
 
 /** What the list shows is in the address, so that a reload, a link and the way back show the same. */
-export function useDictionaryAddress(): DictionaryAddress {
-  const [search, setSearch] = useSearchParams();
+export function useDictionaryAddress({ search, change }: Address): DictionaryAddress {
   const q = search.get('q')?.trim() ?? '';
   const pattern = patterns.find((one) => one === search.get('pattern'));
   const [text, setText] = useState(q);
   const sent = useRef(q);
-
-  const change = (name: 'q' | 'pattern', value: string | undefined) =>
-    setSearch(
-      (before) => {
-        const next = new URLSearchParams(before);
-        value ? next.set(name, value) : next.delete(name);
-        return next;
-      },
-      { replace: true },
-    );
   const submit = (typed: string) => {
     sent.current = typed.trim();
-    if (sent.current !== q) change('q', sent.current);
+    if (sent.current !== q) change('q', sent.current || undefined);
   };
 
   // the address changed elsewhere: by the way back, or by the navigation
@@ -45,10 +34,12 @@ export function useDictionaryAddress(): DictionaryAddress {
     sent.current = q;
     setText(q);
   }, [q]);
-  // biome-ignore lint/correctness/useExhaustiveDependencies: only typing starts the clock
+  const latest = useRef(submit);
   useEffect(() => {
-    if (text.trim() === q) return;
-    const timer = setTimeout(() => submit(text), settledAfterMs);
+    latest.current = submit;
+  });
+  useEffect(() => {
+    const timer = setTimeout(() => latest.current(text), settledAfterMs);
     return () => clearTimeout(timer);
   }, [text]);
 
