@@ -79,7 +79,7 @@ export function BlockEditor({ block, place, of, edits, library }: Props) {
             label="Note"
             optional
             rows={1}
-            className="col-span-full"
+            className="col-span-full [&_textarea]:min-h-target!"
             maxLength={1000}
             autoFocus={noteOpen && block.note === ''}
             value={block.note}
@@ -93,12 +93,12 @@ export function BlockEditor({ block, place, of, edits, library }: Props) {
       {lines.length > 0 && (
         <div
           aria-hidden="true"
-          className={`mt-2 hidden gap-x-2.5 border-b border-line pb-1.5 text-xs font-bold text-ink2 @[43rem]:grid ${lineGrid}`}
+          className={`mt-2 hidden gap-x-2.5 border-b border-line pb-1.5 text-xs font-bold text-ink2 @[32rem]:grid ${lineGrid}`}
         >
           <span>Movement</span>
           <span>Dose</span>
-          <span>Demo</span>
-          <span>Instead, when missing</span>
+          <span className="hidden @[50rem]:inline">Demo</span>
+          <span className="hidden @[50rem]:inline">Instead, when missing</span>
         </div>
       )}
       <ol>

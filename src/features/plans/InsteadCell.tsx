@@ -15,6 +15,7 @@ export function InsteadCell({ line, library }: { line: WrittenLine; library: Pla
         // biome-ignore lint/suspicious/noArrayIndexKey: two ways may lead to one movement
         <li key={at} className={way.from === 'plan' ? undefined : 'text-ink2'}>
           {way.lack}: {movementName(library.names, way.movementId)}
+          {way.dose && `, ${way.dose}`}
           {way.from === 'dictionary' && <span className="sr-only"> (from the dictionary)</span>}
         </li>
       ))}

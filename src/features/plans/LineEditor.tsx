@@ -24,7 +24,7 @@ type Props = {
 
 /** One grid for the lines and for the names of their columns. */
 export const lineGrid =
-  '@[43rem]:grid-cols-[minmax(9rem,1.2fr)_minmax(8rem,1.1fr)_6.5rem_minmax(7rem,0.9fr)_calc(4*var(--target-small))]';
+  '@[32rem]:grid-cols-[minmax(0,1.3fr)_minmax(0,1fr)_calc(4*var(--target-small))] @[50rem]:grid-cols-[minmax(9rem,1.2fr)_minmax(8rem,1.1fr)_6.5rem_minmax(7rem,0.9fr)_calc(4*var(--target-small))]';
 
 /** A line of a block: movement and dose to type into, what shows it, what to do instead. Enter goes on to the next. */
 export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLast, edits, library }: Props) {
@@ -42,9 +42,9 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
     <li data-of={id} className="border-b border-line py-2" onKeyDown={goOn}>
       <fieldset
         aria-label={`Line ${place}${line.movementId === null ? '' : `: ${called}`}`}
-        className={`grid min-w-0 grid-cols-[minmax(0,1fr)_auto] items-start gap-x-2.5 gap-y-1.5 ${lineGrid} @[43rem]:[&_label]:sr-only`}
+        className={`grid min-w-0 grid-cols-[minmax(0,1fr)_auto] items-start gap-x-2.5 gap-y-1.5 ${lineGrid} @[32rem]:[&_label]:sr-only @[50rem]:pointer-fine:[&_input]:text-sm`}
       >
-        <div data-part="movement" className="col-span-full @[43rem]:col-span-1 [&_input]:font-extrabold">
+        <div data-part="movement" className="col-span-full @[32rem]:col-auto [&_input]:font-extrabold">
           <MovementField
             label="Movement"
             movements={library.movements}
@@ -56,7 +56,7 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
           />
           {more === 'closed' && line.note && <p className="mt-1 text-sm text-ink2 wrap-anywhere">{line.note}</p>}
         </div>
-        <div data-part="dose">
+        <div data-part="dose" className="row-start-2 @[32rem]:row-auto">
           <DoseField
             label="Dose"
             value={line.dose}
@@ -64,9 +64,20 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
             onChange={(dose) => edits.setLine(id, { dose })}
           />
         </div>
+        <div className="col-span-full text-sm @[32rem]:col-span-1 @[32rem]:row-start-2 @[50rem]:row-auto @[50rem]:pt-2.5">
+          {line.movementId !== null && (
+            <>
+              <span className="font-bold @[50rem]:hidden">Demo: </span>
+              <DemoCell team={library.team} facts={library.facts.get(line.movementId)} />
+            </>
+          )}
+        </div>
+        <div className="col-span-full text-sm @[32rem]:col-span-2 @[32rem]:row-start-2 @[50rem]:col-span-1 @[50rem]:row-auto @[50rem]:pt-2.5">
+          <InsteadCell line={line} library={library} />
+        </div>
         <Toolbar
           label={`Change ${called}`}
-          className="flex self-end @[43rem]:order-last @[43rem]:mt-0.5 @[43rem]:self-start"
+          className="col-start-2 row-start-2 flex self-end @[32rem]:col-start-3 @[32rem]:row-start-1 @[32rem]:mt-0.5 @[32rem]:self-start @[50rem]:col-start-5"
         >
           <IconButton
             icon="chevron"
@@ -103,17 +114,6 @@ export const LineEditor = memo(function LineEditor({ line, place, isFirst, isLas
             onClick={() => edits.removeLine(id)}
           />
         </Toolbar>
-        <div className="col-span-full text-sm @[43rem]:col-span-1 @[43rem]:pt-2.5">
-          {line.movementId !== null && (
-            <>
-              <span className="font-bold @[43rem]:hidden">Demo: </span>
-              <DemoCell team={library.team} facts={library.facts.get(line.movementId)} />
-            </>
-          )}
-        </div>
-        <div className="col-span-full text-sm @[43rem]:col-span-1 @[43rem]:pt-2.5">
-          <InsteadCell line={line} library={library} />
-        </div>
       </fieldset>
       {more === 'open' && (
         <div className="mt-2 grid gap-4 bg-surface p-3">

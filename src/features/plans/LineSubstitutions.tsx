@@ -88,7 +88,7 @@ function SubstitutionRow({ one, place, line, library, onChange, onRemove }: RowP
   return (
     <fieldset
       aria-label={`Way ${place} to do without`}
-      className="grid min-w-0 gap-2 border-s-4 border-line ps-3 @[34rem]:grid-cols-2 @[60rem]:grid-cols-[11rem_minmax(0,1fr)_8rem_minmax(0,1fr)_auto]"
+      className="grid min-w-0 gap-2 border-s-4 border-line ps-3 @[34rem]:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] @[48rem]:grid-cols-[9.5rem_minmax(0,1fr)_minmax(0,1fr)_minmax(0,1.2fr)_auto]"
     >
       <SelectField
         label="When missing"
@@ -115,6 +115,7 @@ function SubstitutionRow({ one, place, line, library, onChange, onRemove }: RowP
       />
       <DoseField
         label="Dose"
+        className="@[34rem]:col-start-1 @[48rem]:col-auto"
         value={one.dose}
         empty={one.movementId === null ? 'fine' : 'fault'}
         onChange={(dose) => onChange({ dose })}
@@ -131,7 +132,7 @@ function SubstitutionRow({ one, place, line, library, onChange, onRemove }: RowP
         icon="trash"
         label={`Remove way ${place}`}
         look="quiet"
-        className="justify-self-start @[60rem]:mt-6"
+        className="justify-self-start @[34rem]:col-start-3 @[34rem]:row-start-2 @[34rem]:mt-6 @[48rem]:col-start-5 @[48rem]:row-start-1"
         onClick={onRemove}
       />
     </fieldset>

@@ -59,6 +59,7 @@ export function PlanDesk({ session, person, timeZone, library, meta, actions, as
             team={team}
             timeZone={timeZone}
             session={session}
+            isSaved={save.is === 'saved'}
             saveFirst={async () => ((await kept.flush()) ? kept.current().base.version : null)}
             onRemoved={() => {
               // nothing is left to be saved

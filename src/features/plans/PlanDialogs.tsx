@@ -39,6 +39,7 @@ export function PlanDialogs({ kept, names, question, compare, onClose }: Props) 
         of="plan"
         differences={differences}
         theirs={theirs ?? []}
+        note="Taking theirs can be undone here. Keeping yours replaces theirs for good."
         show={(entry) => <EntryText entry={entry} names={names} />}
         onDecide={(choice) => {
           kept.decide(typeof choice === 'object' ? { both: joinEntries(choice.both, content) } : choice);

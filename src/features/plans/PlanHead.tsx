@@ -39,7 +39,7 @@ export function PlanHead({ plan, edits }: { plan: WrittenPlan; edits: PlanEdits 
             label="Note"
             optional
             rows={1}
-            className="col-span-full"
+            className="col-span-full [&_textarea]:min-h-target!"
             maxLength={2000}
             autoFocus={plan.note === ''}
             value={plan.note}

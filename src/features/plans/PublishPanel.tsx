@@ -17,6 +17,8 @@ type Props = {
   team: string;
   timeZone: string;
   session: Session;
+  /** the remarks are about the plan as it was saved last */
+  isSaved: boolean;
   /** saves what was written last. @returns the version that the server then has, or null where it could not be saved */
   saveFirst: () => Promise<number | null>;
   onRemoved: () => void;
@@ -30,7 +32,7 @@ export function PublishPanel(props: Props) {
   return props.session.state === 'published' ? <Published {...props} /> : <Unpublished {...props} />;
 }
 
-function Unpublished({ team, session, saveFirst, onRemoved }: Props) {
+function Unpublished({ team, session, isSaved, saveFirst, onRemoved }: Props) {
   const { data: remarks, error, refetch } = useQuery(publishCheckQuery(team, session.id, session.version));
   const publish = usePublish(team, session.id);
   const [fault, setFault] = useState<string | null>(null);
@@ -76,6 +78,7 @@ function Unpublished({ team, session, saveFirst, onRemoved }: Props) {
             </div>
           )}
           {remarks.length === 0 && <p className="mb-3 text-sm">Nothing is missing.</p>}
+          {!isSaved && <p className="mb-3 text-sm text-ink2">This is about the plan as it was saved last.</p>}
         </>
       )}
       <FormFault>{fault}</FormFault>
@@ -125,6 +128,7 @@ function RemoveDraft({ team, session, onRemoved }: Pick<Props, 'team' | 'session
 }
 
 function Published({ team, timeZone, session, saveFirst }: Props) {
+  const { data: remarks = [] } = useQuery(publishCheckQuery(team, session.id, session.version));
   const unpublish = useUnpublish(team, session.id);
   const [asked, setAsked] = useState<'no' | 'yes'>('no');
   const [fault, setFault] = useState<string | null>(null);
@@ -146,6 +150,12 @@ function Published({ team, timeZone, session, saveFirst }: Props) {
         Members see it{session.publishedAt && ` since ${formatInstant(session.publishedAt, timeZone)}`}. What you change
         here they see at once.
       </p>
+      {remarks.length > 0 && (
+        <div className="mt-3">
+          <p className="text-sm text-ink2">Still worth a look:</p>
+          <RemarkList team={team} remarks={remarks} />
+        </div>
+      )}
       <div className="mt-3">
         <Button onClick={() => setAsked('yes')}>Take back to a draft</Button>
       </div>

@@ -59,7 +59,7 @@ export function ReadField({
           {focus === 'in' && !isEmpty && understood !== value && (
             <div
               aria-hidden="true"
-              className="absolute start-0 top-full z-10 max-w-[min(20rem,80vw)] min-w-full rounded border-thin border-edge bg-surface px-3 py-1 text-sm"
+              className="absolute start-0 top-full z-10 w-max max-w-[min(20rem,80vw)] min-w-full rounded border-thin border-edge bg-surface px-3 py-1 text-sm"
             >
               {understood === null ? (
                 <span className="text-ink2">not understood yet</span>

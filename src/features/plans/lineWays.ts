@@ -26,17 +26,25 @@ export function lackText(lack: { missing: MissingThing; missingKitItemId: string
   return (lack.missingKitItemId !== null && kit.get(lack.missingKitItemId)?.withoutText) || 'missing kit';
 }
 
-export type Way = { lack: string; movementId: string; from: 'plan' | 'dictionary' };
+export type Way = {
+  lack: string;
+  movementId: string;
+  /** the plan's own; the dictionary makes one of the line's dose */
+  dose: string | null;
+  from: 'plan' | 'dictionary';
+};
 
 /** What there is to do instead of a line: what the plan says, then what the dictionary adds to it. */
 export function waysOf(line: WrittenLine, facts: MovementFacts | undefined, kit: KitById): Way[] {
   const planned = line.substitutions.flatMap((one): Way[] =>
-    one.movementId === null ? [] : [{ lack: lackText(one, kit), movementId: one.movementId, from: 'plan' }],
+    one.movementId === null
+      ? []
+      : [{ lack: lackText(one, kit), movementId: one.movementId, dose: one.dose, from: 'plan' }],
   );
   const inPlan = new Set(planned.map(({ movementId }) => movementId));
   const known = (facts?.substitutions ?? [])
     .filter(({ to }) => !inPlan.has(to.id))
-    .map((one): Way => ({ lack: lackText(one, kit), movementId: one.to.id, from: 'dictionary' }));
+    .map((one): Way => ({ lack: lackText(one, kit), movementId: one.to.id, dose: null, from: 'dictionary' }));
   return [...planned, ...known];
 }
 

@@ -80,9 +80,11 @@ export function usePlanEdits(kept: KeptDocument<WrittenPlan>) {
       setLine: (id: string, change: Partial<WrittenLine>) =>
         kept.change(edit.setLine(plan(), id, change), `${id} ${Object.keys(change).join()}`),
       chooseMovement: (id: string, movementId: string | null) => {
+        // on leaving the field the focus is on its way elsewhere already
+        const isInField = document.activeElement?.closest(`[data-of="${id}"] [data-part="movement"]`) != null;
         apply(edit.setLine(plan(), id, { movementId }));
         const line = blockOf(id)?.lines.find((one) => one.id === id);
-        if (movementId !== null && !line?.dose) focusOn([id, 'dose']);
+        if (isInField && movementId !== null && !line?.dose) focusOn([id, 'dose']);
       },
       removeLine: (id: string) => {
         const block = blockOf(id);
