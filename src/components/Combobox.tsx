@@ -36,7 +36,10 @@ function narrowed(options: readonly Option[], text: string): Option[] {
   return fits.toSorted((a, b) => starts(a) - starts(b));
 }
 
-/** A typed choice with completion. Leaving the field without a choice puts back what was chosen before; an emptied field chooses nothing. */
+/**
+ * A typed choice with completion. Leaving the field takes an option whose name was typed in full, else puts back what was chosen
+ * before; where nothing was, what was typed stays and the field says that it is no choice yet. An emptied field chooses nothing.
+ */
 export function Combobox(props: Props) {
   const {
     options,
@@ -58,7 +61,8 @@ export function Combobox(props: Props) {
 
   const chosenLabel =
     value === null ? '' : (options.find((option) => option.value === value)?.label ?? valueLabel ?? '');
-  const text = typed ?? chosenLabel;
+  const isStray = shown === 'closed' && value === null && Boolean(typed?.trim());
+  const text = (shown === 'open' || isStray ? typed : null) ?? chosenLabel;
   const fitting = typed?.trim() && !onQuery ? narrowed(options, typed) : options;
   const fresh = typed?.trim() ?? '';
   const isNew = onCreate && fresh !== '' && !options.some((option) => plain(option.label) === plain(fresh));
@@ -77,14 +81,19 @@ export function Combobox(props: Props) {
     close();
   };
   const leave = () => {
+    const exact = fresh && offers.find((option) => option.value !== making && plain(option.label) === plain(fresh));
+    if (exact) return take(exact);
     if (typed !== null && typed.trim() === '' && value !== null) onChange(null, null);
-    setTyped(null);
+    setTyped(value === null && fresh && onCreate ? typed : null);
     close();
   };
 
   const note = state === 'busy' ? 'Looking' : offers.length === 0 ? 'Nothing by that name' : undefined;
   return (
-    <Field {...{ label, hint, error, optional, labelled, id, className }}>
+    <Field
+      {...{ label, hint, optional, labelled, id, className }}
+      error={isStray ? `“${fresh}” is not in the list. Choose one, or add it.` : error}
+    >
       {(wiring) => (
         <div className="relative">
           <input
