@@ -22,7 +22,7 @@ export function BestDemo({ team, movement, moment, children }: Props) {
   if (!moment)
     return (
       <>
-        {src && <Still src={src} alt={movement.name} loading="eager" className="w-full" />}
+        {src && <Still src={src} alt={movement.name} loading="eager" className="w-full md:max-w-xl" />}
         <div className="pt-3">{children}</div>
       </>
     );
@@ -30,7 +30,12 @@ export function BestDemo({ team, movement, moment, children }: Props) {
   return (
     <>
       {/* the button below leads to the same place: one stop of the Tab key is enough */}
-      <Link to={momentPath(team, moment)} tabIndex={-1} aria-hidden="true" className="relative -mx-4.5 block md:mx-0">
+      <Link
+        to={momentPath(team, moment)}
+        tabIndex={-1}
+        aria-hidden="true"
+        className="relative -mx-4.5 block md:mx-0 md:max-w-xl"
+      >
         <Still src={src} length={length} loading="eager" className="w-full" />
         <span className="absolute inset-0 m-auto flex size-16 items-center justify-center rounded bg-shade text-onShade">
           <Icon name="play" size={30} fill="filled" />

@@ -25,8 +25,12 @@ export function CautionsField() {
       </p>
       <div ref={tools.box} className="grid gap-2.5">
         {cautions.fields.map((caution, at) => (
-          <div key={caution.id} data-line={at} className="caution flex items-start gap-1 bg-surface py-2 ps-3">
-            <div className="grid min-w-0 grow gap-2">
+          <div
+            key={caution.id}
+            data-line={at}
+            className="caution flex flex-wrap items-start justify-end gap-1 bg-surface py-2 ps-3 pe-3 sm:flex-nowrap sm:pe-1"
+          >
+            <div className="grid min-w-0 grow basis-full gap-2 sm:basis-0">
               <TextField
                 label={`Caution ${at + 1}: what to do`}
                 placeholder="Clear the floor before you hop."

@@ -1,6 +1,5 @@
 import type { ReactNode } from 'react';
 import { Caution } from '../../components/Caution';
-import { EmptyState } from '../../components/EmptyState';
 import { PageTitle, Section } from '../../components/PageTitle';
 import { TextLink } from '../../components/TextLink';
 import { teamPath, useMay } from '../../lib/session';
@@ -41,6 +40,14 @@ export function FloorMovement({ team, kit, page, arrived }: Props) {
             'Needs no kit.'
           )}
         </p>
+        {!best && (
+          <p className="mt-3 text-ink2">
+            <strong className="text-ink">Nobody has filmed this yet.</strong>{' '}
+            {substitutions.length > 0
+              ? 'Go by the words below, or look at what to do instead.'
+              : 'Go by the words below, and ask your coach where you are not sure.'}
+          </p>
+        )}
       </BestDemo>
       <div className="mt-5 space-y-6">
         {movement.cautions.length > 0 && (
@@ -70,13 +77,6 @@ export function FloorMovement({ team, kit, page, arrived }: Props) {
           <Section title="More moments">
             <MomentRows team={team} moments={others} size="large" />
           </Section>
-        )}
-        {moments.length === 0 && (
-          <EmptyState title="Nobody has filmed this yet.">
-            {substitutions.length > 0
-              ? 'Go by the words above, or look at what to do instead.'
-              : 'Go by the words above, and ask your coach where you are not sure.'}
-          </EmptyState>
         )}
         {mayEdit && (
           <p className="text-sm">

@@ -69,7 +69,7 @@ function Need({ at, kit, onRemove }: { at: number; kit: KitById; onRemove: () =>
             <SelectField
               label={what}
               labelled="hidden"
-              className="min-w-0 grow basis-40 sm:max-w-72"
+              className="min-w-0 grow basis-28 sm:max-w-72"
               error={error?.kitItemId?.message}
               {...register(`${base}.kitItemId`)}
             >

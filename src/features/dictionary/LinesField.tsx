@@ -31,11 +31,11 @@ export function LinesField({ name, legend, hint, one, placeholder }: Props) {
       <p className="mb-2 text-sm text-ink2">{hint}</p>
       <div ref={tools.box} className="grid gap-1.5">
         {lines.fields.map((line, at) => (
-          <div key={line.id} data-line={at} className="flex items-start gap-1">
+          <div key={line.id} data-line={at} className="flex flex-wrap items-start justify-end gap-1 sm:flex-nowrap">
             <TextField
               label={`${legend}, ${one} ${at + 1}`}
               labelled="hidden"
-              className="min-w-0 grow"
+              className="min-w-0 grow basis-full sm:basis-0"
               placeholder={placeholder}
               autoComplete="off"
               error={formState.errors[name]?.[at]?.text?.message}

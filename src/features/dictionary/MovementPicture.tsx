@@ -44,7 +44,7 @@ export function MovementPicture({ team, movement }: { team: string; movement: Mo
         )}
       </div>
       <p className="mt-1.5 text-sm text-ink2">
-        {pictureUrl ? 'Saved by itself.' : 'Without one, members see a picture of the newest demo.'}
+        {pictureUrl ? 'Saved by itself.' : 'Without one, members see the newest demo’s, once there is one.'}
       </p>
       <FormFault>
         {tooLarge ? `At most ${mostBytes / 1024 / 1024} MB fit here. Choose a smaller file.` : set.error?.message}

@@ -53,9 +53,8 @@ const columnsFor = (team: string, kit: KitById): Column<MovementInList>[] => [
 
 const choiceColumn = ({ chosen, toggle }: MergeChoice): Column<MovementInList> => ({
   key: 'choose',
-  head: 'One of the two',
-  headShown: 'hidden',
-  width: 'w-14',
+  head: 'Choose',
+  width: 'w-16',
   cell: ({ id, name }) => {
     const isChosen = chosen?.includes(id) ?? false;
     return (
