@@ -24,10 +24,12 @@ export function BlockEditor({ block, place, of, edits, library }: Props) {
   const name = blockName(block);
   return (
     <section data-of={id} aria-label={`Block ${place}: ${name}`} className="@container">
-      <div className="flex items-center gap-3">
+      <div className="flex flex-wrap items-center gap-x-3 @[32rem]:flex-nowrap">
         <TapeStrip kind={block.kind} className="w-23" />
-        <h3 className="min-w-0 grow text-md font-extrabold wrap-anywhere">{name}</h3>
-        <Toolbar label={`Change ${name}`} className="flex">
+        <h3 className="order-last min-w-0 basis-full text-md @[32rem]:order-none @[32rem]:grow @[32rem]:basis-0 font-extrabold wrap-anywhere">
+          {name}
+        </h3>
+        <Toolbar label={`Change ${name}`} className="ms-auto flex">
           <IconButton
             icon="chevron"
             label="Move the block up"

@@ -88,7 +88,7 @@ function SubstitutionRow({ one, place, line, library, onChange, onRemove }: RowP
   return (
     <fieldset
       aria-label={`Way ${place} to do without`}
-      className="grid min-w-0 gap-2 border-s-4 border-line ps-3 @[34rem]:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] @[48rem]:grid-cols-[9.5rem_minmax(0,1fr)_minmax(0,1fr)_minmax(0,1.2fr)_auto]"
+      className="grid min-w-0 gap-2 border-s-4 border-line ps-3 @[34rem]:grid-cols-[minmax(0,1fr)_minmax(0,1fr)_auto] @[48rem]:grid-cols-[10.5rem_minmax(0,1fr)_minmax(0,1fr)_minmax(0,1.2fr)_auto]"
     >
       <SelectField
         label="When missing"
