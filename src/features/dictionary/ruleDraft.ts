@@ -15,7 +15,7 @@ export type RuleDraft = {
 export const ruleTypes = [
   { value: 'same', label: 'The same count' },
   { value: 'samePerSide', label: 'The same count on each side' },
-  { value: 'times', label: 'More or fewer: so many times the count' },
+  { value: 'times', label: 'So many times the count' },
   { value: 'secondsForReps', label: 'Seconds instead of reps' },
   { value: 'fixed', label: 'Always one dose' },
 ] as const satisfies readonly { value: DoseRule['type']; label: string }[];
