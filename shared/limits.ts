@@ -17,7 +17,6 @@ export const limits = {
   uploadPartBytes: 16 * MB,
   /** S3's own limit */
   uploadParts: 10_000,
-  uploadsAtOnce: 10,
   partsAtOnce: 4,
   /** longest recording taken */
   recordingMs: 4 * 60 * 60 * 1000,

@@ -12,8 +12,9 @@ import { ChapterRow } from '../models/marks';
 import type { Actor } from './actor';
 import { audit } from './audit';
 import { mediaUrl } from './context';
+import { newestDemos } from './demos';
 import { bumpDictionary, dictionaryOf, type TeamDictionary } from './dictionary';
-import { presentMoments, visibleChaptersWhere } from './moments';
+import { chapterPictureUrls, presentMoments, visibleChaptersWhere } from './moments';
 import { pageOf, readCursor } from './pages';
 import { refreshSearchOf } from './searchIndex';
 import { substitutionsAround } from './substitutions';
@@ -89,9 +90,13 @@ function doneWithout({ movements }: TeamDictionary, without: readonly string[], 
 }
 
 async function presentList(actor: Actor, rows: Movement[]): Promise<contract.MovementInList[]> {
-  const shown = await shownCounts(
-    actor,
-    rows.map(({ id }) => id),
+  const ids = rows.map(({ id }) => id);
+  const shown = await shownCounts(actor, ids);
+  // where nobody gave a movement a picture, its newest demo shows what it is
+  const demos = await newestDemos(actor, ids);
+  const stills = await chapterPictureUrls(
+    actor.team.id,
+    [...demos.values()].map(({ id }) => id),
   );
   return rows.map((row) => ({
     id: row.id,
@@ -99,7 +104,7 @@ async function presentList(actor: Actor, rows: Movement[]): Promise<contract.Mov
     otherNames: row.otherNames,
     pattern: row.pattern,
     kitNeeded: row.kitNeeded,
-    pictureUrl: pictureUrlOf(row),
+    pictureUrl: pictureUrlOf(row) ?? stills.get(demos.get(row.id)?.id ?? '') ?? null,
     demoCount: Math.min(limits.countCap, shown.get(row.id) ?? 0),
   }));
 }

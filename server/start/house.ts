@@ -90,6 +90,8 @@ export class Opening {
       MEDIA_SECRET,
       NODE_ENV: plan.mode,
       PUBLIC_URL: url,
+      // in development Vite stands in front with the pages
+      ...(plan.mode === 'production' ? { CLIENT_DIR: path.resolve('dist/client') } : {}),
       ...process.env,
       ...database,
       ...store,

@@ -15,7 +15,7 @@ import * as captions from '../../services/captions';
 import * as chapters from '../../services/chapters';
 import { store } from '../../services/context';
 import * as cues from '../../services/cues';
-import { startMaking } from '../../services/recordingMaking';
+import { giveUp, startMaking } from '../../services/recordingMaking';
 import { finishStep, inputOf, progressOf, startStep } from '../../services/recordingSteps';
 import { drawDemoRecording } from '../definitions';
 import { handle } from '../handler';
@@ -54,6 +54,12 @@ export const drawDemoRecordingHandler = handle(
       });
     });
   },
+  (of) =>
+    giveUp(of, 'drawing', {
+      code: 'notDrawn',
+      message: 'This demo recording could not be drawn. Everything else works; upload one of your own instead.',
+      retry: false,
+    }),
 );
 
 function scriptOf(name: string) {
