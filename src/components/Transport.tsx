@@ -3,9 +3,9 @@ import { formatMs, formatMsWithTenths, spokenMs } from '../../shared/domain/time
 import { useKeys } from '../lib/keys';
 import { type Playhead, useAtMs, usePlayState } from '../lib/playhead';
 import { Button } from './Button';
-import { inputLook } from './Field';
 import { Icon } from './Icon';
 import { Key } from './Key';
+import { SmallSelect } from './SmallSelect';
 
 type Props = {
   playhead: Playhead;
@@ -37,7 +37,7 @@ export function Transport({ playhead, durationMs, strip }: Props) {
     <div role="group" aria-label="Player">
       <SeekBar playhead={playhead} durationMs={durationMs} strip={strip} />
       <div className="mt-1 flex flex-wrap items-center gap-x-1.5 gap-y-2">
-        <Button size="small" className="min-w-26" onClick={toggle}>
+        <Button size="small" className="min-w-32" onClick={toggle}>
           <Icon name={playing ? 'pause' : 'play'} size={16} />
           {playing ? 'Pause' : 'Play'}
           <Key name="Space" />
@@ -54,25 +54,17 @@ export function Transport({ playhead, durationMs, strip }: Props) {
             {label}
           </Button>
         ))}
-        <label className="text-sm">
-          <span className="sr-only">Speed</span>
-          <select
-            className={`${inputLook} min-h-targetSmall! py-0.5! text-sm! max-sm:text-base!`}
-            value={rate}
-            onChange={(event) => playhead.setRate(Number(event.target.value))}
-          >
-            {rates.map((one) => (
-              <option key={one} value={one}>
-                {one}×
-              </option>
-            ))}
-          </select>
-        </label>
+        <SmallSelect
+          label="Speed"
+          value={rate}
+          options={rates.map((one) => ({ value: one, label: `${one}×` }))}
+          onChange={(event) => playhead.setRate(Number(event.target.value))}
+        />
+        <p className="flex flex-wrap items-center gap-x-1.5 gap-y-1 text-sm text-ink2 max-sm:hidden">
+          <Key name="ArrowLeft" /> <Key name="ArrowRight" /> 1 s, with <Key name="Shift" /> 0.1 s
+        </p>
         <Clock playhead={playhead} />
       </div>
-      <p className="mt-1.5 flex flex-wrap items-center gap-x-1.5 gap-y-1 text-sm text-ink2 max-sm:hidden">
-        <Key name="ArrowLeft" /> <Key name="ArrowRight" /> 1 s, with <Key name="Shift" /> 0.1 s
-      </p>
       {fault && (
         <p role="alert" className="mt-1 text-sm font-bold text-danger">
           {fault}

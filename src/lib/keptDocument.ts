@@ -70,7 +70,7 @@ export class KeptDocument<T> {
     this.base = saved;
     this.history = startHistory(saved.content);
     const left = source.drafts.read();
-    if (left && JSON.stringify(left.content) !== JSON.stringify(saved.content)) this.left = left;
+    if (left && !isAlike(left.content, saved.content)) this.left = left;
     else if (left) source.drafts.remove();
     this.snapshot = this.picture();
   }
@@ -117,6 +117,11 @@ export class KeptDocument<T> {
     this.base = saved;
     this.history = startHistory(saved.content);
     this.lastStep = null;
+    if (this.left && isAlike(this.left.content, saved.content)) {
+      // what was left had reached the server after all, as the page was closed
+      this.left = null;
+      this.source.drafts.remove();
+    }
     this.report({ is: 'saved' });
     return true;
   }
@@ -227,24 +232,26 @@ export class KeptDocument<T> {
     }
     this.report({ is: 'saving' });
     try {
-      const saved = await this.source.save(this.base.version, content);
-      this.base = { version: saved.version, content };
-      this.tries = 0;
-      this.keepDraft();
-      this.report({ is: this.isUnsaved() ? 'waiting' : 'saved' });
-      return true;
+      return this.afterSave((await this.source.save(this.base.version, content)).version, content);
     } catch (error) {
-      this.report(this.afterFailure(error));
+      if (!(error instanceof ApiError)) throw error;
+      const theirs = error.code === 'stale' ? this.source.readCurrent(error.current) : null;
+      // an earlier save arrived and only its answer was lost
+      if (theirs && isAlike(theirs.content, content)) return this.afterSave(theirs.version, content);
+      this.report(theirs ? { is: 'stale', theirs } : this.afterFailure(error));
       return false;
     }
   }
 
-  private afterFailure(error: unknown): SaveState<T> {
-    if (!(error instanceof ApiError)) throw error;
-    if (error.code === 'stale') {
-      const theirs = this.source.readCurrent(error.current);
-      if (theirs) return { is: 'stale', theirs };
-    }
+  private afterSave(version: number, content: T): true {
+    this.base = { version, content };
+    this.tries = 0;
+    this.keepDraft();
+    this.report({ is: this.isUnsaved() ? 'waiting' : 'saved' });
+    return true;
+  }
+
+  private afterFailure(error: ApiError): SaveState<T> {
     if (error.code === 'invalid') return { is: 'refused', reason: Object.values(error.fields)[0] ?? error.message };
     const after = againAfterMs[this.tries];
     if (passing.has(error.code) && after !== undefined) {
@@ -272,3 +279,6 @@ export class KeptDocument<T> {
     };
   }
 }
+
+/** Both come out of the same schema, which puts their fields in the same order. */
+const isAlike = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b);

@@ -10,6 +10,7 @@ import { Icon } from '../components/Icon';
 import { LeaveDialog } from '../components/LeaveDialog';
 import { PageTitle } from '../components/PageTitle';
 import { SaveState } from '../components/SaveState';
+import { stays } from '../components/stays';
 import { Transport } from '../components/Transport';
 import { chapterFileAddress, chaptersQuery } from '../features/chapters/api';
 import { ChapterDialogs } from '../features/chapters/ChapterDialogs';
@@ -117,20 +118,27 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
       </div>
 
       <div className="mt-3 grid gap-5 min-[56.25rem]:grid-cols-2 min-[56.25rem]:items-start">
-        <div className="min-[56.25rem]:sticky min-[56.25rem]:top-3">
-          <RecordingPicture team={team} recording={recording} playhead={playhead} />
-          {recording.state === 'ready' && (
-            <Transport
-              playhead={playhead}
-              durationMs={durationMs ?? 0}
-              strip={<ChapterTape chapters={snapshot.content} durationMs={durationMs ?? 0} />}
-            />
-          )}
-          <div className="mt-4">
-            <ChapterTools edits={edits} canUndo={snapshot.canUndo} canRedo={snapshot.canRedo} canPlace={canPlace} />
+        <div className="contents min-[56.25rem]:sticky min-[56.25rem]:top-3 min-[56.25rem]:block">
+          <div className={stays}>
+            <RecordingPicture team={team} recording={recording} playhead={playhead} />
+          </div>
+          <div>
+            {recording.state === 'ready' && (
+              <Transport
+                playhead={playhead}
+                durationMs={durationMs ?? 0}
+                strip={<ChapterTape chapters={snapshot.content} durationMs={durationMs ?? 0} />}
+              />
+            )}
+            <div className="mt-4">
+              <ChapterTools edits={edits} canUndo={snapshot.canUndo} canRedo={snapshot.canRedo} canPlace={canPlace} />
+            </div>
           </div>
         </div>
-        <section aria-label="Chapters" className="border-thin border-line bg-surface">
+        <section
+          aria-label="Chapters"
+          className="border-thin border-line bg-surface max-sm:[&_:is(button,input,select,textarea)]:scroll-mt-[60vw] min-[56.25rem]:max-h-[max(32rem,calc(100dvh-11.5rem))] min-[56.25rem]:overflow-y-auto"
+        >
           <ChapterList
             chapters={snapshot.content}
             edits={edits}

@@ -12,6 +12,7 @@ import { Icon } from '../components/Icon';
 import { LeaveDialog } from '../components/LeaveDialog';
 import { PageTitle } from '../components/PageTitle';
 import { SaveState } from '../components/SaveState';
+import { stays } from '../components/stays';
 import { Transport } from '../components/Transport';
 import { tell } from '../components/toasts';
 import { asLines, captionFileAddress, captionsQuery, useCaptionSource } from '../features/captions/api';
@@ -128,29 +129,36 @@ function Words({ recording, captions, cues, chapters }: Props) {
       </div>
 
       <div className="mt-3 grid gap-5 min-[56.25rem]:grid-cols-[minmax(20rem,27.5rem)_minmax(0,1fr)] min-[56.25rem]:items-start min-[112rem]:grid-cols-[40rem_minmax(0,1fr)]">
-        <div>
-          <RecordingPicture team={team} recording={recording} playhead={playhead}>
-            <SaidLine lines={lines} playhead={playhead} />
-          </RecordingPicture>
-          {recording.state === 'ready' && <Transport playhead={playhead} durationMs={recording.durationMs ?? 0} />}
-          <div className="mt-5">
-            <CueBoard
-              team={team}
-              recordingId={recording.id}
-              kept={keptCues}
-              playhead={playhead}
-              movements={movements}
-              names={names}
-              onAddMovement={add}
-              canPin={recording.state === 'ready'}
-              momentAt={(ms) => ({
-                text: lines[lineAt(lines, ms)]?.text ?? '',
-                movementId: chapterAt(chapters.items, ms)?.movementId ?? null,
-              })}
-            />
+        <div className="contents min-[56.25rem]:block">
+          <div className={stays}>
+            <RecordingPicture team={team} recording={recording} playhead={playhead}>
+              <SaidLine lines={lines} playhead={playhead} />
+            </RecordingPicture>
+          </div>
+          <div>
+            {recording.state === 'ready' && <Transport playhead={playhead} durationMs={recording.durationMs ?? 0} />}
+            <div className="mt-5">
+              <CueBoard
+                team={team}
+                recordingId={recording.id}
+                kept={keptCues}
+                playhead={playhead}
+                movements={movements}
+                names={names}
+                onAddMovement={add}
+                canPin={recording.state === 'ready'}
+                momentAt={(ms) => ({
+                  text: lines[lineAt(lines, ms)]?.text ?? '',
+                  movementId: chapterAt(chapters.items, ms)?.movementId ?? null,
+                })}
+              />
+            </div>
           </div>
         </div>
-        <section aria-label="Captions" className="border-thin border-line bg-surface">
+        <section
+          aria-label="Captions"
+          className="max-sm:[&_:is(button,input,select,textarea)]:scroll-mt-[60vw] border-thin border-line bg-surface"
+        >
           {lines.length === 0 ? (
             <div className="px-4">
               <EmptyState

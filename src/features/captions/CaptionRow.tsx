@@ -56,7 +56,6 @@ export function CaptionRow({ line, index, state, said, last, faults, edits, play
     } else if (event.key === 'ArrowUp' && from === to && index > 0 && !value.slice(0, from).includes('\n'))
       goTo(index - 1, 0);
     else if (event.key === 'ArrowDown' && from === to && !last && !value.slice(from).includes('\n')) goTo(index + 1, 0);
-    else if (event.key === 'Escape') event.currentTarget.blur();
   };
 
   return (

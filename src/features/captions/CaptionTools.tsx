@@ -3,7 +3,7 @@ import { Button } from '../../components/Button';
 import { ToggleChip } from '../../components/Chip';
 import { Key } from '../../components/Key';
 import { keepKeys } from '../../components/keepKeys';
-import { SelectField } from '../../components/TextField';
+import { SmallSelect } from '../../components/SmallSelect';
 import { UndoButtons } from '../../components/UndoButtons';
 import { useKeys } from '../../lib/keys';
 import type { LineEdits } from './useLineEdits';
@@ -53,21 +53,20 @@ export function CaptionTools(props: Props) {
   });
   return (
     // biome-ignore lint/a11y/noStaticElementInteractions: the buttons inside do the work
-    <div className="flex flex-wrap items-end gap-2 border-b border-line p-2" onMouseDown={keepKeys}>
+    <div className="flex flex-wrap items-center gap-2 border-b border-line p-2" onMouseDown={keepKeys}>
       <ToggleChip pressed={follow === 'on'} onClick={toggle}>
         Follow the picture <Key name="f" />
       </ToggleChip>
       <Button size="small" disabled={faulty.length === 0} onClick={nextFault}>
-        {faulty.length === 0 ? 'Nothing to mend' : `Next of ${faulty.length} to look at`} <Key name="n" />
+        {faulty.length === 0 ? 'Nothing to mend' : `Next of ${faulty.length} to mend`} <Key name="n" />
       </Button>
       <Button size="small" onClick={() => edits.insert(at)}>
         Add a line <Key name="a" />
       </Button>
       <UndoButtons {...{ canUndo, canRedo }} onUndo={edits.undo} onRedo={edits.redo} />
-      <SelectField
+      <SmallSelect
         label="Reading speed by"
-        labelled="hidden"
-        className="ms-auto min-w-0"
+        className="ms-auto"
         value={profile}
         onChange={(event) => onProfile(profileNames.find((name) => name === event.target.value) ?? 'bbc')}
         options={profileNames.map((name) => ({

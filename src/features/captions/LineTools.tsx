@@ -39,7 +39,7 @@ export function LineTools({ line, index, last, edits, playhead, field }: Props) 
         onMouseDown={(event) => event.preventDefault()}
         onClick={() => edits.split(index, place(), 'by share')}
       >
-        Split at the cursor
+        Split at the cursor <Key name="Enter" />
       </Button>
       {!last && (
         <Button size="small" onClick={() => edits.join(index)}>
@@ -52,6 +52,10 @@ export function LineTools({ line, index, last, edits, playhead, field }: Props) 
       <Button size="small" look="danger" onClick={() => edits.remove(index)}>
         Delete <Key name="Delete" />
       </Button>
+      <p className="basis-full text-xs text-ink2">
+        <Key name="Shift+Enter" /> a new row · <Key name="Mod+Enter" /> splits where the picture is · <Key name="t" />{' '}
+        into the text, <Key name="Escape" /> out of it
+      </p>
     </div>
   );
 }

@@ -10,6 +10,7 @@ import {
 } from '../../../shared/domain/captions/editLines';
 import { announce } from '../../lib/announce';
 import type { KeptDocument } from '../../lib/keptDocument';
+import { leaveField } from '../../lib/leaveField';
 import type { Playhead } from '../../lib/playhead';
 import type { Lines } from './api';
 import { lineAt } from './lineFaults';
@@ -76,7 +77,10 @@ export function useLineEdits(kept: KeptDocument<Lines>, playhead: Playhead, dura
       select(index, 'seek');
       playhead.play();
     },
-    close: () => setAt(null),
+    /** out of a field first, then out of the line */
+    close: () => {
+      if (!leaveField()) setAt(null);
+    },
     step: (by: 1 | -1) => {
       const { content } = lines();
       const from = at ?? Math.max(0, lineAt(content, playhead.atMs()) - by);

@@ -39,7 +39,7 @@ export function ChapterForm({ chapter, edits, library, blocks, playhead }: Props
         <EdgeField edge="end" chapter={chapter} edits={edits} playhead={playhead} />
       </div>
       <KindChoice kind={chapter.kind} onChange={(kind) => edits.set(id, { kind })} />
-      <div className="grid gap-3.5 @md:grid-cols-2">
+      <div className="grid items-end gap-3.5 @md:grid-cols-2">
         <MovementField
           label="Movement"
           optional={chapter.kind !== 'demo' && chapter.kind !== 'substitution'}
@@ -64,32 +64,34 @@ export function ChapterForm({ chapter, edits, library, blocks, playhead }: Props
         />
       </div>
       {chapter.kind === 'substitution' && <SubstitutionFields chapter={chapter} edits={edits} library={library} />}
-      <SelectField
-        label="Block of the session"
-        hint={library.blocks === null ? 'Link the recording to a session to choose one of its blocks.' : undefined}
-        value={chapter.blockId ?? ''}
-        onChange={(event) => edits.set(id, { blockId: event.target.value || null })}
-      >
-        <option value="">None</option>
-        {chapter.blockId !== null && !blocks.has(chapter.blockId) && (
-          <option value={chapter.blockId}>A block of another session</option>
-        )}
-        {[...blocks].map(([blockId, name]) => (
-          <option key={blockId} value={blockId}>
-            {name}
-          </option>
-        ))}
-      </SelectField>
-      <TextAreaField
-        label="Note"
-        optional
-        rows={1}
-        maxLength={1000}
-        value={note.text}
-        error={note.problem}
-        onChange={(event) => note.type(event.target.value)}
-        onBlur={note.leave}
-      />
+      <div className="grid items-start gap-3.5 @md:grid-cols-2">
+        <SelectField
+          label="Block of the session"
+          hint={library.blocks === null ? 'Link the recording to a session to choose one of its blocks.' : undefined}
+          value={chapter.blockId ?? ''}
+          onChange={(event) => edits.set(id, { blockId: event.target.value || null })}
+        >
+          <option value="">None</option>
+          {chapter.blockId !== null && !blocks.has(chapter.blockId) && (
+            <option value={chapter.blockId}>A block of another session</option>
+          )}
+          {[...blocks].map(([blockId, name]) => (
+            <option key={blockId} value={blockId}>
+              {name}
+            </option>
+          ))}
+        </SelectField>
+        <TextAreaField
+          label="Note"
+          optional
+          rows={1}
+          maxLength={1000}
+          value={note.text}
+          error={note.problem}
+          onChange={(event) => note.type(event.target.value)}
+          onBlur={note.leave}
+        />
+      </div>
       {/* biome-ignore lint/a11y/noStaticElementInteractions: the buttons inside do the work */}
       <div className="flex flex-wrap gap-2" onMouseDown={keepKeys}>
         <Button size="small" onClick={edits.join}>

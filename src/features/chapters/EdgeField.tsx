@@ -28,8 +28,12 @@ export function EdgeField({ edge, chapter, edits, playhead }: Props) {
           className="w-26 flex-none"
           onCommit={(ms) => edits.move(chapter.id, edge, ms)}
         />
-        <Button size="small" onClick={() => edits.move(chapter.id, edge, playhead.atMs())}>
-          Take the picture’s
+        <Button
+          size="small"
+          aria-label={`Set the ${edge} to where the picture is`}
+          onClick={() => edits.move(chapter.id, edge, playhead.atMs())}
+        >
+          Set here
         </Button>
       </div>
       {/* biome-ignore lint/a11y/useSemanticElements: a fieldset would need a legend that is shown */}

@@ -11,19 +11,21 @@ export function KindChoice({ kind, onChange }: { kind: ChapterKind; onChange: (k
   return (
     <fieldset>
       <legend className="mb-1 text-sm font-bold">Kind</legend>
-      <div className="grid grid-cols-2 gap-1 @sm:grid-cols-3 @xl:grid-cols-5">
+      <div className="grid grid-cols-3 gap-1 @md:grid-cols-5">
         {chapterKinds.map((one) => (
           <label
             key={one}
             className={clsx(
-              'flex min-h-targetSmall items-center gap-1.5 rounded border-thin px-1.5 py-1 text-sm leading-tight has-focus-visible:outline-3 has-focus-visible:outline-ink',
+              'grid min-h-target content-center gap-1 rounded border-thin px-1.5 py-1 text-sm leading-tight has-focus-visible:outline-3 has-focus-visible:outline-ink',
               one === kind ? 'border-ink bg-surface font-extrabold' : 'border-transparent hover:bg-raised',
             )}
           >
             <input type="radio" name={name} className="sr-only" checked={one === kind} onChange={() => onChange(one)} />
-            <TapeStrip kind={one} className="w-6" />
-            <span className="min-w-0 grow">{kindNames[one]}</span>
-            <Key name={kindKeys[one]} />
+            <span className="flex items-center gap-1.5">
+              <TapeStrip kind={one} className="w-8" />
+              <Key name={kindKeys[one]} />
+            </span>
+            <span>{kindNames[one]}</span>
           </label>
         ))}
       </div>

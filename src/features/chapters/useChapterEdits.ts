@@ -17,6 +17,7 @@ import {
 import { formatMsWithTenths } from '../../../shared/domain/timecode';
 import { announce } from '../../lib/announce';
 import type { KeptDocument } from '../../lib/keptDocument';
+import { leaveField } from '../../lib/leaveField';
 import type { Playhead } from '../../lib/playhead';
 import { kindNames, type Names, withOwnName } from './chapterNames';
 
@@ -75,7 +76,10 @@ export function useChapterEdits(kept: Chapters, playhead: Playhead, durationMs: 
     select,
     selectBefore: () => step(-1),
     selectAfter: () => step(1),
-    close: () => select(null, 'stay'),
+    /** out of a field first, then out of the chapter */
+    close: () => {
+      if (!leaveField()) select(null, 'stay');
+    },
     startHere: () =>
       apply(
         startChapterAt(
