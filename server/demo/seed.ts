@@ -125,7 +125,7 @@ async function seedSession(demo: DemoTeam, session: DemoSession): Promise<void> 
     publishedAt: session.state === 'published' ? new Date(Date.parse(date) - dayMs / 4) : null,
   });
   for (const [position, block] of session.blocks.entries()) await seedBlock(demo, session, block, position);
-  if (session.recording) await seedRecording(demo, session, sessionId);
+  if (session.recording) await seedRecording(demo, session, sessionId, date);
 }
 
 async function seedBlock(demo: DemoTeam, session: DemoSession, block: DemoBlock, position: number): Promise<void> {
@@ -170,7 +170,7 @@ async function seedBlock(demo: DemoTeam, session: DemoSession, block: DemoBlock,
 }
 
 /** The row now, the picture later: the library can be used before the worker has drawn it. */
-async function seedRecording(demo: DemoTeam, session: DemoSession, sessionId: string): Promise<void> {
+async function seedRecording(demo: DemoTeam, session: DemoSession, sessionId: string, date: string): Promise<void> {
   const { recording } = session;
   if (!recording) return;
   const teamId = demoId(demo.slug, 'team');
@@ -185,6 +185,8 @@ async function seedRecording(demo: DemoTeam, session: DemoSession, sessionId: st
     sizeBytes: 0,
     contentType: 'video/mp4',
     state: 'making',
+    // uploaded on the morning of its day, so that lists are in the order of the days
+    createdAt: new Date(Math.min(Date.now(), Date.parse(date) + dayMs / 4)),
   });
   await RecordingStep.create({ teamId, recordingId, step: 'drawing' });
   await enqueue(drawDemoRecording, { teamId, recordingId, script: `${demo.slug}/${session.slug}` });
