@@ -47,7 +47,7 @@ export function ChapterForm({ chapter, edits, library, blocks, playhead }: Props
           value={chapter.movementId}
           placeholder="Type a name"
           onChange={(movement) => edits.set(id, { movementId: movement?.id ?? null })}
-          onCreate={(name) => library.add(name, (movement) => edits.set(id, { movementId: movement.id }))}
+          onCreate={(name) => library.add(name, (movement) => edits.set(id, { movementId: movement.id }, movement))}
         />
         <TextField
           id="chapter-title"

@@ -61,10 +61,12 @@ export function useChapterEdits(kept: Chapters, playhead: Playhead, durationMs: 
     const next = place < 0 ? (chapterAt(list, atMs()) ?? list[0]) : list[place + by];
     if (next) select(next.id, 'seek');
   };
-  const set = (id: string, change: Partial<ChapterFields>): string | null => {
+  /** @param made a movement that was added a moment ago, and is not among the names yet */
+  const set = (id: string, change: Partial<ChapterFields>, made?: { id: string; name: string }): string | null => {
     const chapter = chapters().find((one) => one.id === id);
     if (!chapter) return null;
-    const edit = setFields(chapters(), id, withOwnName(chapter, change, movements));
+    const names = made ? new Map(movements).set(made.id, made.name) : movements;
+    const edit = setFields(chapters(), id, withOwnName(chapter, change, names));
     if ('refused' in edit) return edit.refused;
     kept.change(edit.chapters, `${id} ${Object.keys(change).join()}`);
     return null;
