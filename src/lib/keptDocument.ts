@@ -39,6 +39,8 @@ export type DocumentSource<T> = {
 
 /** A pause in the writing after which it is saved. */
 export const saveAfterMs = 1000;
+/** … and a copy is kept in the browser. */
+const draftAfterMs = 300;
 /** Changes of one kind in quick succession (letters, nudges) are one step of undo. */
 const oneStepMs = 2000;
 /** Tries after a lost connection, then by the button or when the browser is online again. */
@@ -55,6 +57,7 @@ export class KeptDocument<T> {
   private save: SaveState<T> = { is: 'saved' };
   private left: Draft<T> | null = null;
   private timer: ReturnType<typeof setTimeout> | undefined;
+  private draftTimer: ReturnType<typeof setTimeout> | undefined;
   private sending: Promise<boolean> | null = null;
   private tries = 0;
   private lastStep: { group: string; at: number } | null = null;
@@ -133,7 +136,7 @@ export class KeptDocument<T> {
     this.history = takeStep(this.history, saved.content);
     this.lastStep = null;
     this.touchedAt = Date.now();
-    this.source.drafts.remove();
+    this.keepDraft();
     this.report({ is: 'saved' });
   }
 
@@ -173,13 +176,16 @@ export class KeptDocument<T> {
       if (this.save.is === 'failed') void this.flush();
     };
     const hidden = () => {
-      if (document.visibilityState === 'hidden' && this.isUnsaved()) void this.flush();
+      if (document.visibilityState !== 'hidden' || !this.isUnsaved()) return;
+      this.writeDraft();
+      void this.flush();
     };
     window.addEventListener('online', online);
     document.addEventListener('visibilitychange', hidden);
     return () => {
       window.removeEventListener('online', online);
       document.removeEventListener('visibilitychange', hidden);
+      this.writeDraft();
       if (this.isUnsaved()) void this.flush();
       clearTimeout(this.timer);
     };
@@ -203,15 +209,22 @@ export class KeptDocument<T> {
     if (!undecided && this.isUnsaved()) this.timer = setTimeout(() => void this.flush(), saveAfterMs);
   }
 
+  /** A copy a moment later: of 6,000 lines it takes longer than a letter may. */
   private keepDraft(): void {
-    if (this.isUnsaved())
-      this.source.drafts.write({
-        version: this.base.version,
-        base: this.base.content,
-        content: this.history.present,
-        at: new Date().toISOString(),
-      });
+    clearTimeout(this.draftTimer);
+    if (this.isUnsaved()) this.draftTimer = setTimeout(() => this.writeDraft(), draftAfterMs);
     else this.source.drafts.remove();
+  }
+
+  private writeDraft(): void {
+    clearTimeout(this.draftTimer);
+    if (!this.isUnsaved()) return;
+    this.source.drafts.write({
+      version: this.base.version,
+      base: this.base.content,
+      content: this.history.present,
+      at: new Date().toISOString(),
+    });
   }
 
   private send(): Promise<boolean> {

@@ -20,7 +20,7 @@ import { CaptionDialogs } from '../features/captions/CaptionDialogs';
 import { CaptionList } from '../features/captions/CaptionList';
 import { CaptionTools } from '../features/captions/CaptionTools';
 import { ImportCaptions } from '../features/captions/ImportCaptions';
-import { faultyPlaces, lineAt, pictureShape, placeFaults } from '../features/captions/lineFaults';
+import { faultyPlaces, type LineFault, lineAt, pictureShape, placeFaults } from '../features/captions/lineFaults';
 import { SaidLine } from '../features/captions/SaidLine';
 import { useLineEdits } from '../features/captions/useLineEdits';
 import { chaptersQuery } from '../features/chapters/api';
@@ -52,6 +52,8 @@ export function WordsPage() {
   return <Words key={recordingId} {...{ recording, captions, cues, chapters }} />;
 }
 
+/** Until the count has caught up with the writing. */
+const unknownPlaces: ReadonlyMap<number, LineFault[]> = new Map();
 const profileKey = 'tapeline.readingProfile';
 
 type Props = { recording: Recording; captions: Captions; cues: Cues; chapters: Chapters };
@@ -137,22 +139,22 @@ function Words({ recording, captions, cues, chapters }: Props) {
           </div>
           <div>
             {recording.state === 'ready' && <Transport playhead={playhead} durationMs={recording.durationMs ?? 0} />}
-            <div className="mt-5">
-              <CueBoard
-                team={team}
-                recordingId={recording.id}
-                kept={keptCues}
-                playhead={playhead}
-                movements={movements}
-                names={names}
-                onAddMovement={add}
-                canPin={recording.state === 'ready'}
-                momentAt={(ms) => ({
-                  text: lines[lineAt(lines, ms)]?.text ?? '',
-                  movementId: chapterAt(chapters.items, ms)?.movementId ?? null,
-                })}
-              />
-            </div>
+          </div>
+          <div className="max-[56.25rem]:order-last min-[56.25rem]:mt-5">
+            <CueBoard
+              team={team}
+              recordingId={recording.id}
+              kept={keptCues}
+              playhead={playhead}
+              movements={movements}
+              names={names}
+              onAddMovement={add}
+              canPin={recording.state === 'ready'}
+              momentAt={(ms) => ({
+                text: lines[lineAt(lines, ms)]?.text ?? '',
+                movementId: chapterAt(chapters.items, ms)?.movementId ?? null,
+              })}
+            />
           </div>
         </div>
         <section
@@ -192,7 +194,7 @@ function Words({ recording, captions, cues, chapters }: Props) {
               />
               <CaptionList
                 {...{ lines, edits, playhead, profile, picture, follow }}
-                places={counted === lines ? places : new Map()}
+                places={counted === lines ? places : unknownPlaces}
               />
             </>
           )}

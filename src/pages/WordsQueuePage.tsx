@@ -52,7 +52,9 @@ export function WordsQueuePage() {
               }}
               notes={[
                 recording.session
-                  ? `${formatDate(recording.session.date)} · ${recording.session.title} · take ${recording.take}`
+                  ? [formatDate(recording.session.date), recording.session.title, `take ${recording.take}`]
+                      .filter((part) => part !== recording.title)
+                      .join(' · ')
                   : `take ${recording.take} · not linked to a session`,
                 stateNotes[recording.state],
               ]}

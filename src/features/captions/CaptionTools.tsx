@@ -65,13 +65,13 @@ export function CaptionTools(props: Props) {
       </Button>
       <UndoButtons {...{ canUndo, canRedo }} onUndo={edits.undo} onRedo={edits.redo} />
       <SmallSelect
-        label="Reading speed by"
+        label="Reading speed in words a minute, by"
         className="ms-auto"
         value={profile}
         onChange={(event) => onProfile(profileNames.find((name) => name === event.target.value) ?? 'bbc')}
         options={profileNames.map((name) => ({
           value: name,
-          label: `${readingProfiles[name].name}: ${readingProfiles[name].wordsPerMinute.value} words a min`,
+          label: `${readingProfiles[name].name}, ${readingProfiles[name].wordsPerMinute.value} a min`,
         }))}
       />
     </div>

@@ -11,7 +11,7 @@ import type { RowFault } from './rowFaults';
 
 /** Start, length, tape, what it shows, block; without room for it the block goes below the title. */
 export const rowColumns =
-  'grid grid-cols-[4rem_2.5rem_2.5rem_minmax(0,1fr)] items-start gap-x-3 @md:grid-cols-[4.25rem_3rem_2.5rem_minmax(0,1fr)_minmax(0,10rem)]';
+  'grid grid-cols-[4rem_2.5rem_2.5rem_minmax(0,1fr)] items-start gap-x-3 @md:grid-cols-[4.25rem_3rem_2.5rem_minmax(0,1.5fr)_minmax(0,1fr)]';
 
 type Props = {
   chapter: Chapter;

@@ -11,7 +11,7 @@ export function KindChoice({ kind, onChange }: { kind: ChapterKind; onChange: (k
   return (
     <fieldset>
       <legend className="mb-1 text-sm font-bold">Kind</legend>
-      <div className="grid grid-cols-3 gap-1 @md:grid-cols-5">
+      <div className="grid grid-cols-2 gap-1 @xs:grid-cols-3 @md:grid-cols-5">
         {chapterKinds.map((one) => (
           <label
             key={one}
