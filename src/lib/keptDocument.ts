@@ -54,6 +54,8 @@ const passing = new Set(['offline', 'broken', 'unavailable', 'tooOften']);
 export class KeptDocument<T> {
   private history: History<T>;
   private base: Saved<T>;
+  /** the version at the ground in the server's own writing, which may differ from what was sent */
+  private answered: T;
   private save: SaveState<T> = { is: 'saved' };
   private left: Draft<T> | null = null;
   private timer: ReturnType<typeof setTimeout> | undefined;
@@ -71,6 +73,7 @@ export class KeptDocument<T> {
     private readonly source: DocumentSource<T>,
   ) {
     this.base = saved;
+    this.answered = saved.content;
     this.history = startHistory(saved.content);
     const left = source.drafts.read();
     if (left && !isAlike(left.content, saved.content)) this.left = left;
@@ -114,10 +117,14 @@ export class KeptDocument<T> {
     return !this.isUnsaved();
   }
 
-  /** What the server has now. It is shown at once when nothing is unsaved here; else the next save finds out. @returns whether it is shown */
+  /** What the server has now. It is shown at once when nothing is unsaved here; else the next save finds out. @returns whether a newer version is shown now */
   offer(saved: Saved<T>): boolean {
-    if (saved.version <= this.base.version || this.isUnsaved() || this.sending) return false;
+    if (saved.version < this.base.version || this.isUnsaved() || this.sending) return false;
+    // the server may change a version's links, when what they led to is gone
+    if (saved.version === this.base.version && isAlike(saved.content, this.answered)) return false;
+    const isNewer = saved.version > this.base.version;
     this.base = saved;
+    this.answered = saved.content;
     this.history = startHistory(saved.content);
     this.lastStep = null;
     if (this.left && isAlike(this.left.content, saved.content)) {
@@ -126,13 +133,14 @@ export class KeptDocument<T> {
       this.source.drafts.remove();
     }
     this.report({ is: 'saved' });
-    return true;
+    return isNewer;
   }
 
   /** A version that the server made itself, from a file or an earlier version; undo goes back behind it. */
   adopt(saved: Saved<T>): void {
     clearTimeout(this.timer);
     this.base = saved;
+    this.answered = saved.content;
     this.history = takeStep(this.history, saved.content);
     this.lastStep = null;
     this.touchedAt = Date.now();
@@ -245,19 +253,20 @@ export class KeptDocument<T> {
     }
     this.report({ is: 'saving' });
     try {
-      return this.afterSave((await this.source.save(this.base.version, content)).version, content);
+      return this.afterSave(await this.source.save(this.base.version, content), content);
     } catch (error) {
       if (!(error instanceof ApiError)) throw error;
       const theirs = error.code === 'stale' ? this.source.readCurrent(error.current) : null;
       // an earlier save arrived and only its answer was lost
-      if (theirs && isAlike(theirs.content, content)) return this.afterSave(theirs.version, content);
+      if (theirs && isAlike(theirs.content, content)) return this.afterSave(theirs, content);
       this.report(theirs ? { is: 'stale', theirs } : this.afterFailure(error));
       return false;
     }
   }
 
-  private afterSave(version: number, content: T): true {
-    this.base = { version, content };
+  private afterSave(saved: Saved<T>, content: T): true {
+    this.base = { version: saved.version, content };
+    this.answered = saved.content;
     this.tries = 0;
     this.keepDraft();
     this.report({ is: this.isUnsaved() ? 'waiting' : 'saved' });

@@ -21,9 +21,12 @@ import { useChapterEdits } from '../features/chapters/useChapterEdits';
 import { useChapters } from '../features/chapters/useChapters';
 import { kitQuery } from '../features/movementNames/api';
 import { useMovementNames } from '../features/movementNames/useMovementNames';
-import { recordingQuery, sessionOfRecording } from '../features/recordings/oneRecording';
-import { RecordingParticulars } from '../features/recordings/RecordingParticulars';
+import { sessionQuery } from '../features/plans/api';
+import { recordingQuery } from '../features/recordings/api';
+import { ChangeRecording } from '../features/recordings/ChangeRecording';
 import { RecordingPicture } from '../features/recordings/RecordingPicture';
+import { RecordingState } from '../features/recordings/RecordingState';
+import { UploadOfRecording } from '../features/upload/UploadOfRecording';
 import { formatCount, formatDate } from '../lib/format';
 import { Playhead } from '../lib/playhead';
 import { teamPath, useMay, useMe, useTeam } from '../lib/session';
@@ -46,7 +49,7 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
   const mayPublish = useMay('publish');
   const [playhead] = useState(() => new Playhead());
   const { session, durationMs } = recording;
-  const { data: plan } = useQuery({ ...sessionOfRecording(team, session?.id ?? ''), enabled: session !== null });
+  const { data: plan } = useQuery({ ...sessionQuery(team, session?.id ?? ''), enabled: session !== null });
   const { data: kit } = useQuery(kitQuery(team));
   const { movements, names, add, dialog } = useMovementNames(team);
   const blocks = session ? (plan?.blocks ?? null) : null;
@@ -58,12 +61,14 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
   const { kept, snapshot, faults } = useChapters({ team, recordingId: recording.id, person }, chapters, {
     durationMs,
     blockIds,
+    sessionId: session?.id ?? null,
   });
   const edits = useChapterEdits(kept, playhead, durationMs ?? 0, names);
   const [dialogOpen, setDialogOpen] = useDocumentDialog(snapshot.save);
   const [particulars, setParticulars] = useState<'open' | 'closed'>('closed');
   const leaving = useLeaveGuard([kept]);
   const canPlace = recording.state === 'ready' && durationMs !== null;
+  const upload = <UploadOfRecording team={team} recordingId={recording.id} />;
   const count = snapshot.content.length;
 
   return (
@@ -97,7 +102,16 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
         }
       />
       <div className="mt-1 flex flex-wrap gap-x-1 gap-y-1">
-        <Button look="quiet" size="small" className="-ms-3" onClick={() => setParticulars('open')}>
+        <Button
+          look="quiet"
+          size="small"
+          className="-ms-3"
+          onClick={() => {
+            // another session takes the blocks off the chapters that are saved
+            void kept.flush();
+            setParticulars('open');
+          }}
+        >
           <Icon name="edit" size={16} />
           {session ? 'Title, take, session' : 'Link to a session'}
         </Button>
@@ -120,7 +134,7 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
       <div className="mt-3 grid gap-5 min-[56.25rem]:grid-cols-2 min-[56.25rem]:items-start">
         <div className="contents min-[56.25rem]:sticky min-[56.25rem]:top-3 min-[56.25rem]:block">
           <div className={stays}>
-            <RecordingPicture team={team} recording={recording} playhead={playhead} />
+            <RecordingPicture team={team} recording={recording} playhead={playhead} upload={upload} />
           </div>
           <div>
             {recording.state === 'ready' && (
@@ -133,6 +147,11 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
             <div className="mt-4">
               <ChapterTools edits={edits} canUndo={snapshot.canUndo} canRedo={snapshot.canRedo} canPlace={canPlace} />
             </div>
+            {recording.state === 'ready' && (
+              <div className="mt-4">
+                <RecordingState team={team} recording={recording} upload={upload} />
+              </div>
+            )}
           </div>
         </div>
         <section
@@ -151,12 +170,9 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
       </div>
 
       {dialog}
-      <RecordingParticulars
-        team={team}
-        recording={recording}
-        open={particulars === 'open'}
-        onClose={() => setParticulars('closed')}
-      />
+      {particulars === 'open' && (
+        <ChangeRecording team={team} recording={recording} onClose={() => setParticulars('closed')} />
+      )}
       <ChapterDialogs
         team={team}
         recordingId={recording.id}

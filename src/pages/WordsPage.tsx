@@ -27,8 +27,9 @@ import { chaptersQuery } from '../features/chapters/api';
 import { asCues, cuesQuery, useCueSource } from '../features/cues/api';
 import { CueBoard } from '../features/cues/CueBoard';
 import { useMovementNames } from '../features/movementNames/useMovementNames';
-import { recordingQuery } from '../features/recordings/oneRecording';
+import { recordingQuery } from '../features/recordings/api';
 import { RecordingPicture } from '../features/recordings/RecordingPicture';
+import { UploadOfRecording } from '../features/upload/UploadOfRecording';
 import { formatCount, formatDate } from '../lib/format';
 import { useKeys } from '../lib/keys';
 import { Playhead } from '../lib/playhead';
@@ -133,7 +134,12 @@ function Words({ recording, captions, cues, chapters }: Props) {
       <div className="mt-3 grid gap-5 min-[56.25rem]:grid-cols-[minmax(20rem,27.5rem)_minmax(0,1fr)] min-[56.25rem]:items-start min-[112rem]:grid-cols-[40rem_minmax(0,1fr)]">
         <div className="contents min-[56.25rem]:block">
           <div className={stays}>
-            <RecordingPicture team={team} recording={recording} playhead={playhead}>
+            <RecordingPicture
+              team={team}
+              recording={recording}
+              playhead={playhead}
+              upload={<UploadOfRecording team={team} recordingId={recording.id} />}
+            >
               <SaidLine lines={lines} playhead={playhead} />
             </RecordingPicture>
           </div>

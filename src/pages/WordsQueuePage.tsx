@@ -8,7 +8,7 @@ import { MediaRow } from '../components/MediaRow';
 import { PageTitle } from '../components/PageTitle';
 import { SkeletonRows } from '../components/Skeleton';
 import { TextLink } from '../components/TextLink';
-import { recordingsByDate } from '../features/recordings/oneRecording';
+import { recordingsQuery } from '../features/recordings/api';
 import { formatCount, formatDate } from '../lib/format';
 import { teamPath, useTeam } from '../lib/session';
 
@@ -23,7 +23,7 @@ const stateNotes = {
 export function WordsQueuePage() {
   const { slug } = useTeam();
   const { data, error, refetch, hasNextPage, isFetchingNextPage, fetchNextPage } = useInfiniteQuery(
-    recordingsByDate(slug),
+    recordingsQuery(slug),
   );
   const recordings = data?.pages.flatMap(({ items }) => items) ?? [];
   return (

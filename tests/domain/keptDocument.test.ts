@@ -174,6 +174,16 @@ describe('a document that saves itself', () => {
     expect(kept.current().content).toEqual(['mine']);
   });
 
+  it('shows the same version again only when the server changed it, and says nothing of somebody else', async () => {
+    const { kept } = open(new Shelf());
+    kept.change(['one', 'two']);
+    await vi.advanceTimersByTimeAsync(1000);
+    expect(kept.offer({ version: 2, content: ['one', 'two'] })).toBe(false);
+    expect(kept.current().canUndo).toBe(true);
+    expect(kept.offer({ version: 2, content: ['one'] })).toBe(false);
+    expect(kept.current().content).toEqual(['one']);
+  });
+
   describe('what an earlier visit left', () => {
     const at = '2026-03-03T06:00:00.000Z';
 

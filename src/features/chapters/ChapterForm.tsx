@@ -6,10 +6,10 @@ import { MovementField } from '../../components/MovementField';
 import { SelectField, TextAreaField, TextField } from '../../components/TextField';
 import { useTyped } from '../../components/useTyped';
 import type { Playhead } from '../../lib/playhead';
-import type { Library } from './ChapterList';
 import { kindNames, ownName } from './chapterNames';
 import { EdgeField } from './EdgeField';
 import { KindChoice } from './KindChoice';
+import type { Library } from './library';
 import { SubstitutionFields } from './SubstitutionFields';
 import type { ChapterEdits } from './useChapterEdits';
 

@@ -1,27 +1,14 @@
-import type { KitItem } from '../../../shared/contracts/kit';
-import type { Block } from '../../../shared/contracts/sessions';
 import type { Chapter } from '../../../shared/domain/chapters/chapter';
 import { chapterAt } from '../../../shared/domain/chapters/chapterAt';
 import { EmptyState } from '../../components/EmptyState';
 import { Key } from '../../components/Key';
-import type { MovementName } from '../../components/MovementField';
 import { type Playhead, useAtPlayhead } from '../../lib/playhead';
 import { blockNames } from './blockNames';
 import { ChapterForm } from './ChapterForm';
 import { ChapterRow, rowColumns } from './ChapterRow';
-import type { Names } from './chapterNames';
+import type { Library } from './library';
 import type { RowFault } from './rowFaults';
 import type { ChapterEdits } from './useChapterEdits';
-
-export type Library = {
-  movements: readonly MovementName[];
-  names: Names;
-  /** adds a movement to the dictionary, then calls back */
-  add: (name: string, then: (movement: { id: string; name: string }) => void) => void;
-  kit: readonly KitItem[];
-  /** of the recording's session; null without one, or while it is on its way */
-  blocks: readonly Block[] | null;
-};
 
 type Props = {
   chapters: readonly Chapter[];

@@ -2,7 +2,7 @@ import type { Chapter } from '../../../shared/domain/chapters/chapter';
 import { type MissingThing, missingThings } from '../../../shared/domain/words';
 import { MovementField } from '../../components/MovementField';
 import { SelectField } from '../../components/TextField';
-import type { Library } from './ChapterList';
+import type { Library } from './library';
 import type { ChapterEdits } from './useChapterEdits';
 
 const missingNames = {

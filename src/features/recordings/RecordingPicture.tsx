@@ -6,19 +6,21 @@ import { Skeleton } from '../../components/Skeleton';
 import { Still } from '../../components/Still';
 import { VideoPlayer } from '../../components/VideoPlayer';
 import type { Playhead } from '../../lib/playhead';
-import { MakingState } from './MakingState';
-import { pictureQuery } from './oneRecording';
+import { pictureQuery } from './pictureQuery';
+import { RecordingState } from './RecordingState';
 
 type Props = {
   team: string;
   recording: Recording;
   playhead: Playhead;
+  /** how far the file is while it is on its way */
+  upload: ReactNode;
   /** laid over the picture */
   children?: ReactNode;
 };
 
 /** A recording's picture on the desk; while there is none, how far it is. */
-export function RecordingPicture({ team, recording, playhead, children }: Props) {
+export function RecordingPicture({ team, recording, playhead, upload, children }: Props) {
   const ready = recording.state === 'ready';
   const { data, error, refetch, isFetching } = useQuery({ ...pictureQuery(team, recording.id), enabled: ready });
   if (!ready)
@@ -26,7 +28,8 @@ export function RecordingPicture({ team, recording, playhead, children }: Props)
       <div>
         <Still src={recording.posterUrl} className="w-full" loading="eager" />
         <div className="mt-3">
-          <MakingState team={team} recording={recording} />
+          <RecordingState team={team} recording={recording} upload={upload} />
+          <p className="mt-2 text-sm text-ink2">What is written beside it can be read and changed already.</p>
         </div>
       </div>
     );
