@@ -29,7 +29,7 @@ export function RecordingPicture({ team, recording, playhead, upload, children }
         <Still src={recording.posterUrl} className="w-full" loading="eager" />
         <div className="mt-3">
           <RecordingState team={team} recording={recording} upload={upload} />
-          <p className="mt-2 text-sm text-ink2">What is written beside it can be read and changed already.</p>
+          <p className="mt-2 text-sm text-ink2">What was written already can be read and changed.</p>
         </div>
       </div>
     );
