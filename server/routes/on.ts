@@ -134,7 +134,7 @@ function readParams(endpoint: Endpoint, req: Request): Record<string, string> {
   for (const name of paramsOf(endpoint.path)) {
     const value = String(req.params[name] ?? '');
     if (name.endsWith('Id') && !uuid.safeParse(value).success) throw new AppError('notFound');
-    params[name] = value;
+    params[name] = name.endsWith('Id') ? value.toLowerCase() : value;
   }
   return params;
 }

@@ -151,7 +151,7 @@ async function refuseFaulty(actor: Actor, recording: Recording, chapters: Chapte
   const known = await knownLinks(actor, recording, chapters);
   chapters.forEach((chapter, index) => {
     for (const [field, id] of linksOf(chapter))
-      if (id && !known.has(id))
+      if (id && !known[field].has(id))
         fields[`items.${index}.${field}`] = 'This is not in the team’s library any more. Choose another.';
   });
   if (Object.keys(fields).length > 0) throw new AppError('invalid', { fields });
@@ -165,10 +165,17 @@ const linksOf = (chapter: Chapter) =>
     ['missingKitItemId', chapter.missingKitItemId],
   ] as const;
 
-/** Which of the things that chapters point at are there: movements and kit of the team, blocks of the recording's session. */
-async function knownLinks(actor: Actor, recording: Recording, chapters: Chapter[]): Promise<Set<string>> {
+type LinkField = ReturnType<typeof linksOf>[number][0];
+
+/** Which of the things that chapters point at are there, by field: movements and kit of the team, blocks of the recording's session. */
+async function knownLinks(
+  actor: Actor,
+  recording: Recording,
+  chapters: Chapter[],
+): Promise<Record<LinkField, ReadonlySet<string>>> {
   const ids = [...new Set(chapters.flatMap((chapter) => linksOf(chapter).flatMap(([, id]) => id ?? [])))];
-  if (ids.length === 0) return new Set();
+  const none = new Set<string>();
+  if (ids.length === 0) return { blockId: none, movementId: none, standsInForMovementId: none, missingKitItemId: none };
   const teamId = actor.team.id;
   const [movements, kit, blocks] = await Promise.all([
     Movement.findAll({ where: { teamId, id: ids, mergedIntoId: null }, attributes: ['id'] }),
@@ -181,19 +188,25 @@ async function knownLinks(actor: Actor, recording: Recording, chapters: Chapter[
       },
     ),
   ]);
-  return new Set([...movements, ...kit, ...blocks].map(({ id }) => id));
+  const movementIds = new Set(movements.map(({ id }) => id));
+  return {
+    blockId: new Set(blocks.map(({ id }) => id)),
+    movementId: movementIds,
+    standsInForMovementId: movementIds,
+    missingKitItemId: new Set(kit.map(({ id }) => id)),
+  };
 }
 
 async function withoutLostLinks(actor: Actor, recording: Recording, chapters: Chapter[]): Promise<Chapter[]> {
   const followed = await withMergesFollowed(actor, chapters);
   const known = await knownLinks(actor, recording, followed);
-  const keep = (id: string | null) => (id && known.has(id) ? id : null);
+  const keep = (field: LinkField, id: string | null) => (id && known[field].has(id) ? id : null);
   return followed.map((chapter) => ({
     ...chapter,
-    blockId: keep(chapter.blockId),
-    movementId: keep(chapter.movementId),
-    standsInForMovementId: keep(chapter.standsInForMovementId),
-    missingKitItemId: keep(chapter.missingKitItemId),
+    blockId: keep('blockId', chapter.blockId),
+    movementId: keep('movementId', chapter.movementId),
+    standsInForMovementId: keep('standsInForMovementId', chapter.standsInForMovementId),
+    missingKitItemId: keep('missingKitItemId', chapter.missingKitItemId),
   }));
 }
 
@@ -236,6 +249,8 @@ async function replaceRows(actor: Actor, recording: Recording, chapters: Chapter
   await ChapterRow.bulkCreate(
     chapters.map((chapter) => ({ ...chapter, teamId, recordingId: recording.id })),
     {
+      // another team's row with the same id is never written over, whatever was checked before
+      conflictAttributes: ['teamId', 'id'],
       updateOnDuplicate: [
         'startMs',
         'endMs',

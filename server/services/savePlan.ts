@@ -36,7 +36,7 @@ export async function savePlan(actor: Actor, sessionId: string, sent: readonly P
       scheme,
       note,
     })),
-    { updateOnDuplicate: ['position', 'kind', 'title', 'scheme', 'note'] },
+    { conflictAttributes: ownRow, updateOnDuplicate: ['position', 'kind', 'title', 'scheme', 'note'] },
   );
   await BlockLine.bulkCreate(
     lines.map(({ id, blockId, position, movementId, dose, note }) => ({
@@ -48,7 +48,7 @@ export async function savePlan(actor: Actor, sessionId: string, sent: readonly P
       dose,
       note,
     })),
-    { updateOnDuplicate: ['blockId', 'position', 'movementId', 'dose', 'note'] },
+    { conflictAttributes: ownRow, updateOnDuplicate: ['blockId', 'position', 'movementId', 'dose', 'note'] },
   );
   await LineSubstitution.bulkCreate(
     substitutions.map(({ id, lineId, position, movementId, missing, missingKitItemId, dose, reason }) => ({
@@ -72,6 +72,9 @@ export async function savePlan(actor: Actor, sessionId: string, sent: readonly P
   });
   return blocks;
 }
+
+/** Only the team's own row is written over: another team's with the same id makes PostgreSQL refuse, whatever was checked before. */
+const ownRow: ('teamId' | 'id')[] = ['teamId', 'id'];
 
 async function removeOthers(
   teamId: string,

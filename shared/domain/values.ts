@@ -2,7 +2,8 @@ import { z } from 'zod';
 
 /** Values that many resources share. Times are whole milliseconds, dates are calendar dates in the team's time zone. */
 
-export const Id = z.uuid();
+/** Kept in lower case, as PostgreSQL writes them: `A…` and `a…` are one id to it, and have to be one in every comparison of ours. */
+export const Id = z.uuid().toLowerCase();
 export type Id = z.infer<typeof Id>;
 
 export const Ms = z.int().min(0).max(86_400_000);

@@ -103,6 +103,30 @@ describe('chapters', () => {
     expect(body.error.fields).toHaveProperty(['items.0.movementId']);
   });
 
+  it('point at each kind of thing in its own field', async () => {
+    const { session, block } = await makeSession(ours.team, { state: 'draft', movements: [row] });
+    const recording = await makeRecording(ours.team, { session });
+    const { body } = await coach
+      .put(pathOf(recording, 'chapters'))
+      .send({ version: 0, items: [chapter(0, 5000, { blockId: row.id, movementId: block.id })] })
+      .expect(400);
+    expect(Object.keys(body.error.fields).toSorted()).toEqual(['items.0.blockId', 'items.0.movementId']);
+  });
+
+  it('never take over a chapter of another recording by its id in capital letters', async () => {
+    const [one, other] = [await makeRecording(ours.team), await makeRecording(ours.team)];
+    const held = chapter(0, 5000);
+    await coach
+      .put(pathOf(other, 'chapters'))
+      .send({ version: 0, items: [held] })
+      .expect(200);
+    const { body } = await coach
+      .put(pathOf(one, 'chapters'))
+      .send({ version: 0, items: [chapter(0, 2000), chapter(3000, 5000, { id: held.id.toUpperCase() })] })
+      .expect(400);
+    expect(Object.keys(body.error.fields)).toEqual(['items.1.id']);
+  });
+
   it('keep every version, and bring one back as a new one', async () => {
     const recording = await makeRecording(ours.team);
     const kept = chapter(0, 5000, { title: 'First', movementId: row.id });

@@ -67,6 +67,40 @@ const save = (id: string, version: number, more: object) =>
 const faultsOf = async (asked: ReturnType<typeof save>) => Object.keys((await asked.expect(400)).body.error.fields);
 
 describe('a planned session', () => {
+  it.each([
+    ['as it is written', (id: string) => id],
+    ['in capital letters', (id: string) => id.toUpperCase()],
+  ])('never takes over a block or a line of another session by its id, %s', async (_how, spelled) => {
+    const mine = await create();
+    const stranger = await api.signedIn(theirs.coach);
+    const theirRow = await makeMovement(theirs.team, `Their row ${randomUUID()}`);
+    for (const [visitor, team, movement] of [
+      [stranger, theirs, theirRow],
+      [coach, ours, row],
+    ] as const) {
+      const attempt = (blocks: object[]) =>
+        visitor
+          .post(at('sessions', team))
+          .send({ id: randomUUID(), ...plan({ blocks }) })
+          .expect(400);
+      const { body } = await attempt([block({ id: spelled(mine.blocks[0].id), title: 'Taken', lines: [] })]);
+      expect(Object.keys(body.error.fields)).toEqual(['blocks.0.id']);
+      await attempt([block({ lines: [line(movement, { id: spelled(mine.blocks[0].lines[0].id) })] })]);
+    }
+    expect((await coach.get(at(`sessions/${mine.id}`)).expect(200)).body.blocks).toEqual(mine.blocks);
+  });
+
+  it('knows its ids in capital letters too, and takes none twice', async () => {
+    const mine = await create();
+    const [main] = mine.blocks;
+    const again = { ...main, id: main.id.toUpperCase(), title: 'Again' };
+    const { body } = await save(mine.id.toUpperCase(), mine.version, { blocks: [again] }).expect(200);
+    expect(body.blocks).toMatchObject([{ id: main.id, title: 'Again' }]);
+    expect(await faultsOf(save(mine.id, body.version, { blocks: [main, { ...again, lines: [] }] }))).toEqual([
+      'blocks.1.id',
+    ]);
+  });
+
   it('is read back as it was written, with names and who planned it', async () => {
     const substitution = {
       id: randomUUID(),
