@@ -1,13 +1,13 @@
 import { literal, type Model, type ModelStatic, Op, type WhereOptions } from 'sequelize';
 import { z } from 'zod';
+import { Id } from '../../shared/domain/values';
 import { AppError } from '../../shared/errors';
 import { database } from '../models/database';
-import { pageOf, readCursor } from './pages';
+import { InstantInCursor, pageOf, readCursor } from './pages';
 
 export type PageAsked = { cursor?: string | undefined; limit: number };
 
-/** PostgreSQL keeps microseconds, a Date only milliseconds: the cursor carries the time as the database writes it. */
-const Place = z.tuple([z.string().regex(/^\d{4}-\d\d-\d\d \d\d:\d\d:\d\d(\.\d{1,6})?\+00$/), z.uuid()]);
+const Place = z.tuple([InstantInCursor, Id]);
 
 /** A page of rows by the time they were made, newest first, on an index over (…, created_at desc, id desc). */
 export async function newestFirst<M extends Model & { id: string }>(

@@ -5,6 +5,12 @@ import { AppError } from '../../shared/errors';
 
 const Cursor = z.array(z.union([z.string().max(200), z.number()])).max(4);
 
+/** An instant as PostgreSQL writes one in UTC: it keeps microseconds, a Date only milliseconds. */
+export const InstantInCursor = z
+  .string()
+  .regex(/^(?!0000)\d{4}-\d\d-\d\d \d\d:\d\d:\d\d(\.\d{1,6})?\+00$/)
+  .refine((text) => !Number.isNaN(Date.parse(`${text.slice(0, 10)}T${text.slice(11, 19)}Z`)));
+
 export function writeCursor(parts: (string | number)[]): string {
   return Buffer.from(JSON.stringify(parts)).toString('base64url');
 }

@@ -1,4 +1,6 @@
 import { Op, Sequelize, type WhereOptions } from 'sequelize';
+import { z } from 'zod';
+import { Id } from '../../shared/domain/values';
 import { AppError } from '../../shared/errors';
 import { madePrefix, originalsPrefix } from '../../storage/keys';
 import { enqueue, makePoster, removeObjects } from '../jobs/definitions';
@@ -11,7 +13,7 @@ import { requestChapterPictures } from './chapterPictures';
 import { store } from './context';
 import { recordingOf } from './documents';
 import { tell } from './live';
-import { pageOf, readCursor } from './pages';
+import { InstantInCursor, pageOf, readCursor } from './pages';
 import { startMaking } from './recordingMaking';
 import { presentRecording } from './recordingPresent';
 import { sessionOf } from './recordingSession';
@@ -24,12 +26,12 @@ export async function listRecordings(
   actor: Actor,
   query: { cursor?: string | undefined; limit: number; sessionId?: string | undefined },
 ): Promise<{ items: Recording[]; nextCursor: string | null }> {
-  const after = readCursor(query.cursor, 2);
+  const after = readPlace(query.cursor);
   const recordings = await Recording.findAll({
     where: {
       teamId: actor.team.id,
       ...(query.sessionId === undefined ? {} : { sessionId: query.sessionId }),
-      ...(after ? olderThan(String(after[0]), String(after[1])) : {}),
+      ...(after ? olderThan(...after) : {}),
     },
     // the instant as PostgreSQL has it: JavaScript's lacks the microseconds
     attributes: { include: [[Sequelize.literal(`"created_at"::text`), 'createdAtText']] },
@@ -42,17 +44,21 @@ export async function listRecordings(
   return pageOf(recordings, query.limit, (recording) => [String(recording.get('createdAtText')), recording.id]);
 }
 
+const Place = z.tuple([InstantInCursor, Id]);
+
 /** @throws AppError `invalid` for a cursor that holds no instant and no id */
-function olderThan(createdAt: string, id: string): WhereOptions<Recording> {
-  if (!instantPattern.test(createdAt) || !/^[0-9a-f-]{36}$/.test(id))
+function readPlace(cursor: string | undefined): [string, string] | undefined {
+  const parts = readCursor(cursor, 2);
+  if (!parts) return undefined;
+  const place = Place.safeParse(parts);
+  if (!place.success)
     throw new AppError('invalid', { fields: { cursor: 'This list changed. Start at its beginning.' } });
-  return {
-    [Op.and]: Sequelize.literal(`(created_at, id) < (${escaped(createdAt)}::timestamptz, ${escaped(id)}::uuid)`),
-  };
+  return place.data;
 }
 
-/** as PostgreSQL writes one */
-const instantPattern = /^\d{4}-\d\d-\d\d \d\d:\d\d:\d\d(\.\d{1,6})?[+-]\d\d(:\d\d)?$/;
+const olderThan = (createdAt: string, id: string): WhereOptions<Recording> => ({
+  [Op.and]: Sequelize.literal(`(created_at, id) < (${escaped(createdAt)}::timestamptz, ${escaped(id)}::uuid)`),
+});
 
 const escaped = (text: string) => database().escape(text);
 

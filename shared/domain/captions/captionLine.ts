@@ -11,6 +11,7 @@ export const CaptionLine = z
       .trim()
       .min(1, 'A line without words is deleted instead.')
       .max(500, 'At most 500 characters.')
+      .regex(/^\P{Surrogate}*$/u, 'Plain text only.')
       // biome-ignore lint/suspicious/noControlCharactersInRegex: NUL cannot be stored; one way to match only, so that no text makes it slow
       .regex(/^[^\u0000\r\n]+(?:\n[^\u0000\r\n]+)*$/, 'No empty line inside a caption line.'),
   })
