@@ -3,6 +3,7 @@ import type * as contract from '../../shared/contracts/kit';
 import { AppError } from '../../shared/errors';
 import { inTransaction } from '../models/database';
 import { KitItem } from '../models/dictionary';
+import { lowered } from '../models/lowered';
 import type { Actor } from './actor';
 import { audit } from './audit';
 import { bumpDictionary } from './dictionary';
@@ -62,7 +63,7 @@ async function refuseTakenName(actor: Actor, name: string, exceptId?: string): P
     where: {
       teamId: actor.team.id,
       ...(exceptId ? { id: { [Op.ne]: exceptId } } : {}),
-      [Op.and]: where(fn('lower', col('name')), fn('lower', name)),
+      [Op.and]: where(fn('lower', col('name')), lowered(name)),
     },
   });
   if (taken > 0) throw new AppError('nameTaken', { fields: { name: `“${name}” is in the list already.` } });

@@ -8,6 +8,7 @@ import { AppError, type FieldErrors } from '../../shared/errors';
 import { limits } from '../../shared/limits';
 import { database, inTransaction } from '../models/database';
 import { KitItem, Movement } from '../models/dictionary';
+import { lowered } from '../models/lowered';
 import { ChapterRow } from '../models/marks';
 import type { Actor } from './actor';
 import { audit } from './audit';
@@ -233,7 +234,7 @@ async function refuseTakenName(actor: Actor, name: string, exceptId?: string): P
       teamId: actor.team.id,
       mergedIntoId: null,
       ...(exceptId ? { id: { [Op.ne]: exceptId } } : {}),
-      [Op.and]: where(fn('lower', col('name')), fn('lower', name)),
+      [Op.and]: where(fn('lower', col('name')), lowered(name)),
     },
   });
   if (taken > 0) throw new AppError('nameTaken', { fields: { name: `“${name}” is in the dictionary already.` } });

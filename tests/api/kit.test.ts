@@ -38,6 +38,12 @@ describe('the team’s kit', () => {
     expect(body.items.map((item: KitItem) => item.name)).toEqual(['anvil', 'Band', 'sled']);
   });
 
+  it('takes no name twice, whatever signs it has', async () => {
+    const odd = { ...rope, name: "5 $1 'rope' \\ :id" };
+    await coach.post(at('kit')).send(odd).expect(201);
+    expect((await coach.post(at('kit')).send(odd).expect(409)).body.error.code).toBe('nameTaken');
+  });
+
   it('grows by an item, once: a double click is told that it is there', async () => {
     const before = await versionOf();
     const answers = await Promise.all([coach.post(at('kit')).send(rope), coach.post(at('kit')).send(rope)]);

@@ -51,6 +51,12 @@ describe('a new movement', () => {
     expect(await Movement.count({ where: { teamId: ours.team.id, name: 'Wall sit' } })).toBe(1);
   });
 
+  it('takes no name twice, whatever signs it has', async () => {
+    const odd = "Row for $1 \\ 'x' :id";
+    await create(odd);
+    expect((await editor.post(at('movements')).send(fields(odd)).expect(409)).body.error.code).toBe('nameTaken');
+  });
+
   it('takes no name that another one has in any case; a name that is only another name is free', async () => {
     await create('Skips', { otherNames: ['Rope hops'] });
     const { body } = await editor.post(at('movements')).send(fields('sKIPs')).expect(409);
