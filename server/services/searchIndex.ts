@@ -33,6 +33,14 @@ export async function refreshSearchOf(scope: Scope): Promise<void> {
   await database().query(`${refresh} where ${scopes[key]} ${onConflict}`, { replacements: { id } });
 }
 
+/**
+ * The aside that a caption line `l` is said in, next to the chapter `c` that it reaches into: members read and find none of it.
+ * By the line's middle, as the player and the files have it.
+ */
+export const asideOfLine = `
+  select from chapters a where a.recording_id = c.recording_id and a.kind = 'aside' and a.id <> c.id
+    and l.start_ms + l.end_ms >= a.start_ms * 2 and l.start_ms + l.end_ms < a.end_ms * 2`;
+
 const refresh = `
 insert into chapter_search (chapter_id, team_id, recording_id, session_id, movement_id, stands_in_for_movement_id, kind,
                             visibility, coach_id, sort_at, start_ms, end_ms, document)
@@ -55,6 +63,7 @@ left join lateral (
   select string_agg(l.text, ' ' order by l.position) as words
   from caption_tracks t join caption_lines l on l.track_id = t.id
   where t.recording_id = c.recording_id and l.start_ms < c.end_ms and l.end_ms > c.start_ms
+    and not exists (${asideOfLine})
 ) said on true`;
 
 const onConflict = `

@@ -5,6 +5,7 @@ import type { ChapterKind } from '../../shared/domain/words';
 import { database } from '../models/database';
 import type { ChapterRow } from '../models/marks';
 import { type Actor, actorMay } from './actor';
+import { asideOfLine } from './searchIndex';
 
 /** The two ways into `chapter_search`: by movement, and by words. SQL by hand: both were measured at 1.2 million chapters. */
 
@@ -100,7 +101,7 @@ export async function saidIn(
     `select c.id as "chapterId", greatest(l.start_ms, c.start_ms) as "atMs", l.text
      from chapters c join caption_tracks t on t.recording_id = c.recording_id
      join caption_lines l on l.track_id = t.id and l.start_ms < c.end_ms and l.end_ms > c.start_ms
-     where c.id = any(array[:ids]::uuid[])
+     where c.id = any(array[:ids]::uuid[]) and not exists (${asideOfLine})
      union all
      select c.id, q.at_ms, q.text from chapters c
      join cues q on q.recording_id = c.recording_id and q.at_ms >= c.start_ms and q.at_ms < c.end_ms

@@ -58,6 +58,8 @@ beforeAll(async () => {
     .expect(200);
   const lines = [
     { startMs: 31_000, endMs: 33_000, text: 'Squeeze at the top, don’t rush it.' },
+    // starts while the workout still runs, and is said in the aside
+    { startMs: 39_000, endMs: 42_000, text: 'A marmalade jar rolls away.' },
     { startMs: 42_000, endMs: 44_000, text: 'Mind the parrot.' },
   ];
   await coach
@@ -74,6 +76,15 @@ const find = async (visitor: Visitor, q: string, more: Record<string, string> = 
       .query({ q, ...more })
       .expect(200)
   ).body;
+
+it('nobody finds in the chapter before it what is said in an aside', async () => {
+  for (const visitor of [member, coach]) expect((await find(visitor, 'marmalade jar')).groups).toEqual([]);
+  const next = await find(member, 'squeeze marmalade');
+  expect(next.groups[0].findings[0].said.pieces.map(({ text }: { text: string }) => text).join('')).toContain(
+    'Squeeze',
+  );
+  expect(JSON.stringify(next)).not.toContain('jar');
+});
 
 describe('find', () => {
   it.each(['ring row', 'rinng row', 'body row', 'RING ROWS', 'row ring'])(
