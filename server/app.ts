@@ -4,7 +4,6 @@ import compression from 'compression';
 import express, { type Express, Router } from 'express';
 import helmet from 'helmet';
 import pg from 'pg';
-import { limits } from '../shared/limits';
 import type { Config } from './config';
 import { refuseCrossSite } from './middleware/crossSite';
 import { answerError, answerNotFound } from './middleware/errors';
@@ -54,7 +53,6 @@ export async function createApp(config: Config, log: Log): Promise<App> {
   });
   api.use(refuseCrossSite(config.publicUrl));
   api.use(signInLayers(config, pool, rateLimits));
-  api.use(express.json({ limit: limits.jsonBytes }));
   for (const route of allRoutes) route.mount(api, rateLimits);
   api.use(answerNotFound);
   app.use('/api', api);

@@ -1,4 +1,4 @@
-import type { NextFunction, Request, RequestHandler, Response, Router } from 'express';
+import express, { type NextFunction, type Request, type RequestHandler, type Response, type Router } from 'express';
 import multer, { MulterError } from 'multer';
 import { z } from 'zod';
 import {
@@ -11,6 +11,7 @@ import {
   type RateLimit,
 } from '../../shared/contracts/endpoint';
 import { AppError, type FieldErrors } from '../../shared/errors';
+import { limits as sizeLimits } from '../../shared/limits';
 import type { Limits } from '../middleware/limits';
 import { type Actor, requireMay } from '../services/actor';
 import { actorIn } from '../services/membership';
@@ -44,7 +45,7 @@ export function on<E extends Endpoint>(endpoint: E, handler: (call: Call<E>) => 
         limits.layer(endpoint.limit ?? defaultLimit(endpoint)),
         signedIn(endpoint),
         teamAndRole(endpoint),
-        ...(endpoint.file ? [oneFile(endpoint.file.maxBytes)] : [jsonOnly]),
+        ...(endpoint.file ? [oneFile(endpoint.file.maxBytes)] : [jsonOnly, readJson]),
         answer(endpoint, handler),
       );
     },
@@ -75,6 +76,9 @@ const jsonOnly: RequestHandler = (req, _res, next) => {
       : undefined,
   );
 };
+
+/** After limit, sign-in and role, so that nobody has megabytes read who may not send them. */
+const readJson = express.json({ limit: sizeLimits.jsonBytes });
 
 /** multer drains a body that is too large before it says so: the announced length is looked at first. */
 function oneFile(maxBytes: number): RequestHandler {
