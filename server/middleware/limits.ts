@@ -1,3 +1,4 @@
+import { isIPv6 } from 'node:net';
 import type { RequestHandler } from 'express';
 import type pg from 'pg';
 import { RateLimiterPostgres, type RateLimiterRes } from 'rate-limiter-flexible';
@@ -45,7 +46,7 @@ export function openLimits(pool: pg.Pool, scale = 1) {
     /** the first layer of a route's stack */
     layer(bucket: RateLimit): RequestHandler {
       return async (req, _res, next) => {
-        await take(byAddress[bucket], req.ip ?? 'unknown');
+        await take(byAddress[bucket], networkOf(req.ip));
         next();
       };
     },
@@ -61,6 +62,24 @@ export function openLimits(pool: pg.Pool, scale = 1) {
       await byAccount.delete(email);
     },
   };
+}
+
+/** An IPv6 address counts with its whole /64: that many belong to one subscriber (RFC 6177). */
+export function networkOf(address = 'unknown'): string {
+  const v4 = /^::ffff:([\d.]+)$/i.exec(address)?.[1];
+  if (v4) return v4;
+  if (!isIPv6(address)) return address;
+  const [head = '', tail] = address.replace(/%.*$/, '').toLowerCase().split('::');
+  const groups = head === '' ? [] : head.split(':');
+  // a tail may end in an IPv4 address, which is two groups
+  const last = tail === undefined || tail === '' ? [] : tail.split(':');
+  const length = last.length + (tail?.includes('.') ? 1 : 0);
+  const all =
+    tail === undefined ? groups : [...groups, ...Array(Math.max(0, 8 - groups.length - length)).fill('0'), ...last];
+  return `${all
+    .slice(0, 4)
+    .map((group) => Number.parseInt(group, 16).toString(16))
+    .join(':')}::/64`;
 }
 
 async function take(limiter: RateLimiterPostgres, key: string): Promise<void> {
