@@ -3,6 +3,7 @@ import { mkdir, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { QueryTypes } from 'sequelize';
 import { afterAll, describe, expect, it } from 'vitest';
+import { networkOf } from '../../server/middleware/limits';
 import { database } from '../../server/models/database';
 import { limits } from '../../shared/limits';
 import { mailTo, makePerson, makeTeamOfFour, startApi, testPassword } from '../support/api';
@@ -242,6 +243,38 @@ describe('too many requests (6.3.1)', () => {
   });
 });
 
+describe('an address', () => {
+  it('of IPv6 counts with its whole network (RFC 6177)', async () => {
+    const ask = (address: string) => api.visitor().post('/api/forgot-password').set('X-Forwarded-For', address);
+    const statuses = new Set<number>();
+    for (let i = 1; i <= 61; i++) statuses.add((await ask(`2001:db8:1:2:${i.toString(16)}::${i}`).send({})).status);
+    expect([...statuses]).toEqual([400, 429]);
+    await ask('2001:db8:1:3::1').send({}).expect(400);
+  });
+
+  it.each([
+    ['2001:db8:1:2:3:4:5:6', '2001:db8:1:2::/64'],
+    ['2001:DB8::1', '2001:db8:0:0::/64'],
+    ['2001:db8:1::1.2.3.4', '2001:db8:1:0::/64'],
+    ['fe80::1%eth0', 'fe80:0:0:0::/64'],
+    ['::1', '0:0:0:0::/64'],
+    ['::ffff:10.0.0.7', '10.0.0.7'],
+    ['10.0.0.7', '10.0.0.7'],
+    [undefined, 'unknown'],
+  ])('%s counts as %s', (address, network) => {
+    expect(networkOf(address)).toBe(network);
+  });
+});
+
+describe('the body of a request that is refused anyway', () => {
+  it.each([
+    ['of nobody', '/api/teams/any/sessions', 401],
+    ['to nothing', '/api/nothing', 404],
+  ])('is not read: %s', async (_whose, address, status) => {
+    await api.visitor().post(address).set('Content-Type', 'application/json').send('{"broken":').expect(status);
+  });
+});
+
 describe('what lies beside the page (13.4)', () => {
   it.each([
     '/.git/config',
@@ -259,6 +292,18 @@ describe('what lies beside the page (13.4)', () => {
     expect(text).not.toContain('hidden-');
     expect(text).not.toContain('main-1a2b3c');
     expect(text).not.toContain('"dependencies"');
+  });
+
+  it.each([
+    ['/assets/nothing.js', {}, 404, 'notFound'],
+    ['/assets/.env', {}, 404, 'notFound'],
+    ['/assets/%2e%2e%2f%2e%2e%2foutside.txt', {}, 404, 'notFound'],
+    ['/assets/main-1a2b3c.js', { Range: 'bytes=99999-' }, 416, 'rangeNotSatisfiable'],
+    ['/', { Range: 'bytes=99999-' }, 416, 'rangeNotSatisfiable'],
+    ['/assets/main-1a2b3c.js', { 'If-Match': '"another"' }, 400, 'invalid'],
+  ])('is refused, and no failure of ours: %s with %o', async (address, headers, status, code) => {
+    const { body } = await api.visitor().get(address).set(headers).expect(status);
+    expect(body.error).toMatchObject({ code, requestId: expect.any(String) });
   });
 
   it('is told to machines that hold the token alone', async () => {
