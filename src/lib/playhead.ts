@@ -38,6 +38,7 @@ export class Playhead {
   private wantedMs: number | null = null;
   private wants: 'play' | 'pause' = 'pause';
   private wantedRate = 1;
+  private seeks = 0;
   private snapshot: PlaySnapshot = {
     state: 'loading',
     durationMs: 0,
@@ -62,7 +63,13 @@ export class Playhead {
     const to = Math.max(0, durationMs > 0 ? Math.min(ms, durationMs) : ms);
     if (this.media && isReady(this.snapshot)) this.media.seekTo(to);
     else this.wantedMs = to;
+    this.seeks += 1;
     this.tick();
+  }
+
+  /** How often it was moved: who watches the time tells by it whether the time ran or somebody went elsewhere. */
+  seekCount(): number {
+    return this.seeks;
   }
 
   play(): void {

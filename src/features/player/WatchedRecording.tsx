@@ -18,7 +18,7 @@ import { useCaptionChoice } from './useCaptionChoice';
 import { useMediaSession } from './useMediaSession';
 import { usePlace } from './usePlace';
 import { useSpokenChapter } from './useSpokenChapter';
-import { useLoop, useSkips } from './useStretches';
+import { useStretches } from './useStretches';
 import { useWakeLock } from './useWakeLock';
 import { WatchStage } from './WatchStage';
 import './watch.css';
@@ -47,8 +47,7 @@ export function WatchedRecording({ team, watch }: { team: string; watch: Watch }
   );
 
   usePlace(playhead, useKeepPlace(team, watch.recordingId));
-  useSkips(playhead, skips);
-  useLoop(playhead, chapters, loop);
+  useStretches(playhead, { chapters, skips, loop });
   useWakeLock(playhead);
   useSpokenChapter(playingId, chapter?.title ?? null);
   useMediaSession(
