@@ -20,8 +20,9 @@ export function PersonMenu({ room }: { room: 'floor' | 'desk' }) {
       name={`${team.name}, ${me.name}: menu`}
       label={
         <span className="flex min-w-0 items-baseline gap-1.5">
-          <span className="hidden truncate text-ink2 sm:inline">{team.name}</span>
-          <span className="font-bold">{firstName}</span>
+          {/* beside a bar of places there is no room for it below this width; the menu says it */}
+          <span className="hidden truncate text-ink2 min-[1100px]:inline">{team.name}</span>
+          <span className="truncate font-bold">{firstName}</span>
         </span>
       }
       items={[
@@ -40,6 +41,7 @@ export function PersonMenu({ room }: { room: 'floor' | 'desk' }) {
         { label: 'Sign out', icon: 'signOut', onSelect: () => leave.mutate() },
       ]}
     >
+      <p className="mb-2 text-sm text-ink2 wrap-anywhere min-[1100px]:hidden">{team.name}</p>
       <ThemeChoice />
     </Menu>
   );

@@ -37,7 +37,7 @@ export function FloorLayout({ places, home, search, right, phoneTop = 'mark', wi
           phoneTop === 'none' && 'max-md:hidden',
         )}
       >
-        <Link to={home} className="flex min-h-target items-center no-underline">
+        <Link to={home} className="flex min-h-target flex-none items-center no-underline">
           <Wordmark />
         </Link>
         {search && <div className="hidden w-85 min-w-40 shrink md:block">{search}</div>}
