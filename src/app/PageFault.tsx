@@ -12,12 +12,25 @@ export function PageFault() {
   const home = <GoLink to="/">To your team</GoLink>;
   return (
     <PlainLayout>
-      {error instanceof ApiError && error.code === 'notFound' ? (
+      {error instanceof ApiError && (error.code === 'notFound' || error.code === 'invalid') ? (
         <ErrorPage title="There is nothing here" actions={home}>
-          {error.message}
+          {error.code === 'notFound' ? error.message : 'The address is wrong.'}
+        </ErrorPage>
+      ) : isOldPage(error) ? (
+        <ErrorPage title="Tapeline was updated meanwhile" actions={again}>
+          This page is from before. Load it again to go on; nothing that was saved is lost.
         </ErrorPage>
       ) : error instanceof ApiError ? (
-        <ErrorPage title="The page did not arrive" requestId={error.requestId ?? undefined} actions={again}>
+        <ErrorPage
+          title="The page did not arrive"
+          requestId={error.requestId ?? undefined}
+          actions={
+            <>
+              {again}
+              {home}
+            </>
+          }
+        >
           {error.message}
         </ErrorPage>
       ) : (
@@ -35,4 +48,9 @@ export function PageFault() {
       )}
     </PlainLayout>
   );
+}
+
+/** A page's code that is not there any more under its old name, or could not be fetched. */
+function isOldPage(error: unknown): boolean {
+  return error instanceof TypeError && /import|module script/i.test(error.message);
 }

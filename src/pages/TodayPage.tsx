@@ -1,20 +1,37 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { useParams } from 'react-router-dom';
+import { CalendarDate } from '../../shared/domain/values';
 import { LinkChip } from '../components/Chip';
 import { EmptyState } from '../components/EmptyState';
+import { ErrorPage } from '../components/ErrorPage';
+import { GoLink } from '../components/GoButton';
 import { Icon } from '../components/Icon';
 import { PageTitle } from '../components/PageTitle';
 import { TextLink } from '../components/TextLink';
 import { myDayQuery } from '../features/day/api';
 import { DaySteps } from '../features/day/DaySteps';
 import { changedWords, MySession } from '../features/day/MySession';
-import { formatDay } from '../lib/format';
+import { formatDate, formatDay } from '../lib/format';
 import { teamPath, useTeam } from '../lib/session';
 
 /** A member's first page: the day's session as they can do it, with what they own. */
 export function TodayPage() {
   const { slug, name } = useTeam();
   const { date } = useParams();
+  // an address typed by hand, or one that lost its end
+  if (date !== undefined && !CalendarDate.safeParse(date).success)
+    return (
+      <ErrorPage
+        title="There is no such day"
+        actions={<GoLink to={teamPath(slug, 'today')}>To today’s session</GoLink>}
+      >
+        A day’s address ends like 2026-03-14: year, month, day.
+      </ErrorPage>
+    );
+  return <Day slug={slug} name={name} date={date} />;
+}
+
+function Day({ slug, name, date }: { slug: string; name: string; date: string | undefined }) {
   const { data: day } = useSuspenseQuery(myDayQuery(slug, date));
   const dayWords = formatDay(day.date, day.today);
   return (
@@ -30,8 +47,8 @@ export function TodayPage() {
       </div>
       {day.sessions.length === 0 && (
         <>
-          <PageTitle title={day.date === day.today ? 'No session today' : `No session: ${dayWords}`} tab={dayWords} />
-          <EmptyState title="Your coach has published nothing for this day.">
+          <PageTitle title={noSessionWords(day.date, day.today)} tab={dayWords} />
+          <EmptyState title={`Your coach has published nothing for this day${day.date < day.today ? '' : ' yet'}.`}>
             Look at another day, or <TextLink to={teamPath(slug, 'find')}>find a movement</TextLink>.
           </EmptyState>
         </>
@@ -77,4 +94,10 @@ export function TodayPage() {
       </div>
     </div>
   );
+}
+
+/** “No session tomorrow”, “No session on Tue 3 March”. */
+function noSessionWords(date: string, today: string): string {
+  const words = formatDay(date, today);
+  return `No session ${words === formatDate(date) ? `on ${words}` : words.toLowerCase()}`;
 }

@@ -1,4 +1,5 @@
 import { type ReactNode, useRef } from 'react';
+import { Link } from 'react-router-dom';
 import { SkipLink } from '../../components/SkipLink';
 import { Wordmark } from '../../components/Wordmark';
 import { lastRoom, useRoom } from '../../lib/theme';
@@ -10,10 +11,12 @@ export function PlainLayout({ children }: { children: ReactNode }) {
   const main = useRef<HTMLElement>(null);
   usePageFocus(main);
   return (
-    <div className="mx-auto flex min-h-dvh w-full max-w-md flex-col px-5 pt-6 pb-12 sm:pt-[12vh]">
+    <div className="mx-auto flex min-h-dvh w-full max-w-md flex-col px-5 pt-3 pb-12 sm:pt-[12vh]">
       <SkipLink />
-      <header className="mb-8">
-        <Wordmark />
+      <header className="mb-6">
+        <Link to="/" className="inline-flex min-h-target items-center no-underline">
+          <Wordmark />
+        </Link>
       </header>
       <main ref={main} id="main" tabIndex={-1}>
         {children}

@@ -19,8 +19,8 @@ export function DaySteps({ team, day }: { team: string; day: MyDay }) {
           {formatDay(previous.date, today)}
         </LinkChip>
       )}
-      {date !== today && <LinkChip to={teamPath(team, 'today')}>Today</LinkChip>}
-      {next && next.date !== today && (
+      {![date, previous?.date, next?.date].includes(today) && <LinkChip to={teamPath(team, 'today')}>Today</LinkChip>}
+      {next && (
         <LinkChip to={teamPath(team, 'days', next.date)} aria-label={`${formatDay(next.date, today)}: ${next.title}`}>
           {formatDay(next.date, today)}
           <Icon name="back" size={16} className="rotate-180" />
