@@ -6,7 +6,7 @@ type Props = {
   src?: string | null;
   /** only where the words beside it don't say what it shows */
   alt?: string;
-  /** on the picture's corner: “0:48” */
+  /** on the picture's corner: “0:48”, or that there is none: “not filmed” */
   length?: string;
   /** give it a width: `w-23` in a plan line, `w-37` in a result */
   className?: string;

@@ -30,7 +30,8 @@ export function MyBlockView({ team, block }: { team: string; block: MyBlock }) {
           {block.moments.map((moment) => (
             <MediaRow
               key={moment.chapterId}
-              title={moment.title}
+              // the block's head has just said it
+              title={moment.title === name ? `Watch the ${block.kind}` : moment.title}
               to={momentPath(team, moment)}
               still={{ src: moment.pictureUrl, length: formatMs(moment.endMs - moment.startMs) }}
             />
@@ -59,7 +60,7 @@ function LineRow({ team, line }: { team: string; line: MyLine }) {
     <MediaRow
       title={line.movement.name}
       to={demo ? momentPath(team, demo) : teamPath(team, 'dictionary', line.movement.id)}
-      still={{ src: demo?.pictureUrl ?? null, ...(demo ? { length: formatMs(demo.endMs - demo.startMs) } : {}) }}
+      still={{ src: demo?.pictureUrl ?? null, length: demo ? formatMs(demo.endMs - demo.startMs) : 'not filmed' }}
       figure={formatDose(line.dose)}
       notes={[
         insteadOf && (
@@ -71,7 +72,6 @@ function LineRow({ team, line }: { team: string; line: MyLine }) {
         noWayText && <strong className="text-danger">You have {noWayText}. Ask your coach what to do instead.</strong>,
         line.note,
         !insteadOf && !line.note && line.points[0],
-        !demo && 'Not filmed yet',
         insteadOf && (
           <TextLink className="relative z-10" to={teamPath(team, 'dictionary', insteadOf.movement.id)}>
             See {insteadOf.movement.name}

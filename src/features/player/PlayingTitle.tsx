@@ -3,6 +3,7 @@ import type { Watch } from '../../../shared/contracts/watch';
 import { formatMs } from '../../../shared/domain/timecode';
 import { TextLink } from '../../components/TextLink';
 import { formatDate } from '../../lib/format';
+import { notRepeated } from '../../lib/notRepeated';
 import { teamPath } from '../../lib/session';
 
 type Props = {
@@ -24,7 +25,7 @@ export function PlayingTitle({ team, watch, chapter, actions }: Props) {
     chapter?.kind,
     formatMs(chapter ? chapter.endMs - chapter.startMs : watch.durationMs),
     standsInFor && `for ${standsInFor}`,
-    chapter?.missingText,
+    chapter && notRepeated(chapter.missingText, chapter.title),
     coach,
   ].filter(Boolean);
   return (
@@ -35,7 +36,7 @@ export function PlayingTitle({ team, watch, chapter, actions }: Props) {
         {session && (
           <>
             {' · '}
-            <TextLink to={teamPath(team, 'days', session.date)} className="font-normal! text-ink2!">
+            <TextLink to={teamPath(team, 'days', session.date)} className="font-normal! whitespace-nowrap text-ink2!">
               {formatDate(session.date)}
             </TextLink>
           </>

@@ -4,6 +4,7 @@ import { MediaRow } from '../../components/MediaRow';
 import { TextLink } from '../../components/TextLink';
 import { formatDate } from '../../lib/format';
 import { momentPath } from '../../lib/momentPath';
+import { notRepeated } from '../../lib/notRepeated';
 import { teamPath } from '../../lib/session';
 
 /** Results: moments with a picture, grouped by movement. */
@@ -53,7 +54,8 @@ function FindingRow({
   finding: Finding;
   inMyKit: boolean | null;
 }) {
-  const when = moment.session ? formatDate(moment.session.date) : null;
+  // a date stays in one piece: in the narrow column beside a picture it broke after its day
+  const when = moment.session ? formatDate(moment.session.date).replaceAll(' ', '\u00a0') : null;
   const title =
     why === 'demo' && when
       ? `Demo, ${when}`
@@ -63,7 +65,7 @@ function FindingRow({
   const about = [
     moment.coach,
     why === 'demo' ? null : when,
-    moment.missingText,
+    notRepeated(moment.missingText, title),
     why === 'demo' && inMyKit === false ? 'not in your kit' : null,
   ].filter(Boolean);
   return (
