@@ -85,12 +85,15 @@ export function FindPage() {
           </fieldset>
           {found.isPending && <SkeletonRows label="Moments" still="large" />}
           {found.isError && (
-            <ErrorPanel
-              title="The search did not answer."
-              message={found.error.message}
-              requestId={found.error instanceof ApiError ? (found.error.requestId ?? undefined) : undefined}
-              onRetry={() => found.refetch()}
-            />
+            <div className="mt-4">
+              <ErrorPanel
+                title="The search did not answer."
+                message={found.error.message}
+                requestId={found.error instanceof ApiError ? (found.error.requestId ?? undefined) : undefined}
+                busy={found.isFetching ? 'Trying' : undefined}
+                onRetry={() => found.refetch()}
+              />
+            </div>
           )}
           {found.data && (
             <div className={found.isPlaceholderData ? 'opacity-60' : undefined}>
