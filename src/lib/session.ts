@@ -22,8 +22,10 @@ export function useMe(): Me | null {
 export function useChangeOfPerson(): (me: Me | null) => void {
   const queries = useQueryClient();
   return (me) => {
-    queries.clear();
+    // told first, so that open pages leave; clearing everything would leave them without word of it
     queries.setQueryData(meQuery.queryKey, me);
+    queries.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== meQuery.queryKey[0] });
+    queries.getMutationCache().clear();
   };
 }
 

@@ -1,8 +1,6 @@
 import { complaintsOf, isInOrder, picture } from './support/looks';
 import { expect, signInByHand, team, test } from './support/people';
 
-test.use({ baseURL: process.env.BASE_URL });
-
 const mailsTo = async (address: string) => {
   const answer = await fetch(`${process.env.MAIL_URL}/messages.json`);
   const messages = (await answer.json()) as { to: string[]; links: string[]; text: string }[];
@@ -21,7 +19,8 @@ async function linkTo(address: string): Promise<string> {
 test('the sign-in page is in order, says what is wrong and leads back to where one wanted to go', async ({
   browser,
 }, info) => {
-  const page = await browser.newPage({ baseURL: process.env.BASE_URL });
+  const context = await browser.newContext({ baseURL: process.env.BASE_URL });
+  const page = await context.newPage();
   const complaints = complaintsOf(page);
   await page.goto(`${team}/find?q=row`);
   await expect(page).toHaveURL(/\/sign-in\?back=/);
@@ -34,7 +33,7 @@ test('the sign-in page is in order, says what is wrong and leads back to where o
   await expect(page.getByRole('alert')).toContainText('do not belong together');
   // a refused sign-in is the browser's to note, everything else would be ours
   expect(complaints.filter((line) => !line.includes('401'))).toEqual([]);
-  await page.close();
+  await context.close();
 });
 
 test('the owner invites a person, who joins once with the link from the mail; a forgotten password is set anew', async ({
@@ -107,7 +106,8 @@ test('signing out leaves nothing behind', async ({ browser }) => {
   await page.getByRole('button', { name: /Apple Loft, Bo/ }).click();
   await page.getByRole('button', { name: 'Sign out' }).click();
   await expect(page).toHaveURL(/\/sign-in/);
-  await page.goBack();
+  await expect(page.getByRole('heading', { name: 'Sign in' })).toBeVisible();
+  await page.goto(`${team}/today`);
   await expect(page).toHaveURL(/\/sign-in/);
   await page.close();
 });

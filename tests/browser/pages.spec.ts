@@ -59,13 +59,12 @@ async function watchPath(page: Page): Promise<string> {
 }
 
 test.describe('every page', () => {
-  test.skip(({ isMobile }) => isMobile, 'the widths are set here');
-
   for (const { name, who, path } of pages) {
     test(name, async ({ as }) => {
       const page = await as(who);
       const complaints = complaintsOf(page);
       const address = typeof path === 'string' ? path : await path(page);
+      await page.goto(address);
       for (const theme of ['dark', 'light']) {
         await page.evaluate((choice) => localStorage.setItem('tapeline.theme', choice), theme);
         await page.goto(address);
