@@ -39,7 +39,10 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
   const [dictionary, mine] = await Promise.all([dictionaryOf(actor.team.id), kitOf(actor)]);
   const query = resolve(dictionary.search, q);
   const usable = usableKit(dictionary, kit === 'mine' && mine.told ? mine.items : null, query.without);
-  const meant = query.movements.slice(0, mostMovements).map(({ id }) => id);
+  const needing = (id: string) => asksForAny(dictionary, id, query.without);
+  // “without a rope” alone asks about everything that needs one
+  const asked = query.accepted ? query.movements.map(({ id }) => id) : [...dictionary.movements.keys()].filter(needing);
+  const meant = answersFirst(asked, needing).slice(0, mostMovements);
   const ways = new Map(meant.map((id) => [id, waysAround(dictionary, id, usable)] as const));
   const instead = [...ways.values()].flatMap((list) => list.map(({ movementId }) => movementId));
 
@@ -71,7 +74,7 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
     if (others.length > 0) groups.push({ movement: named, heading: 'insteadOf', inMyKit, findings: others });
     if (!fits) hiddenByKit += demos.length;
     else if (demos.length > 0) groups.push({ movement: named, heading: 'demos', inMyKit, findings: demos });
-    if (demos.length === 0) notFilmed.push(id);
+    if (demos.length === 0 && query.accepted) notFilmed.push(id);
   }
   const listed = new Set(groups.flatMap(({ findings }) => findings.map(({ moment }) => moment.chapterId)));
   const lines = spoken
@@ -91,6 +94,16 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
     notFilmed: notFilmed.map(name),
     hiddenByKit,
   };
+}
+
+/** “Row without rings” is first about the row that needs rings; what never needed them comes behind. */
+function answersFirst(ids: readonly string[], isAnswer: (id: string) => boolean): string[] {
+  return [...ids.filter(isAnswer), ...ids.filter((id) => !isAnswer(id))];
+}
+
+function asksForAny({ movements }: TeamDictionary, id: string, kitItemIds: readonly string[]): boolean {
+  const anyOf = movements.get(id)?.kitNeeded.flatMap((need) => need.anyOf) ?? [];
+  return anyOf.some(({ kitItemId }) => kitItemIds.includes(kitItemId));
 }
 
 const nothingAsked: Found = {

@@ -147,8 +147,8 @@ function Understood({ data }: { data: { understood: Parameters<typeof understood
   if (!movements && !without) return null;
   return (
     <p className="mt-2.5 text-sm text-ink2">
-      Showing <strong className="text-ink">{movements ?? 'everything'}</strong>
-      {without && <>, without {without}</>}.
+      Showing <strong className="text-ink">{movements ?? 'what to do'}</strong>
+      {without && (movements ? `, without ${without}` : ` without ${without}`)}.
     </p>
   );
 }

@@ -116,6 +116,15 @@ describe('find', () => {
     expect(found.hiddenByKit).toBe(1);
   });
 
+  it.each(['no rings', 'what do I do without rings', 'row without rings'])(
+    'answers “%s” with what to do instead of what needs them, before anything else',
+    async (q) => {
+      const [first] = (await find(member, q)).groups;
+      expect(first).toMatchObject({ heading: 'insteadOf', movement: { name: 'Ring row' } });
+      expect(first.findings[0].moment).toMatchObject({ startMs: 20_000 });
+    },
+  );
+
   it('keeps to the member’s own kit when asked to, and counts what that hides', async () => {
     const door = (await member.get(at('kit'))).body.items.find(({ name }: { name: string }) => name === 'door');
     await member
