@@ -18,6 +18,7 @@ export function PersonMenu({ room }: { room: 'floor' | 'desk' }) {
   return (
     <Menu
       name={`${team.name}, ${me.name}: menu`}
+      className="max-md:-me-2 max-md:px-2!"
       label={
         <span className="flex min-w-0 items-baseline gap-1.5">
           {/* beside a bar of places there is no room for it below this width; the menu says it */}

@@ -23,26 +23,30 @@ type Props = {
 export function MediaRow({ title, to, still, size = 'small', notes = [], figure, tape, action }: Props) {
   return (
     <li className="relative flex items-start gap-3 py-2.5">
-      {still !== null && <Still {...still} className={size === 'small' ? 'w-23' : 'w-32 min-[360px]:w-37'} />}
+      {still !== null && (
+        <Still {...still} className={size === 'small' ? 'w-[min(5.75rem,28%)]' : 'w-[min(9.25rem,42%)]'} />
+      )}
       <div className="min-w-0 grow">
-        <div className="text-md font-extrabold wrap-anywhere">
-          {to ? (
-            <Link to={to} className="no-underline after:absolute after:inset-0 hover:underline">
-              {title}
-            </Link>
-          ) : (
-            title
-          )}
+        <div className="flex items-start justify-between gap-3 text-md font-extrabold">
+          <div className="min-w-0 wrap-anywhere">
+            {to ? (
+              <Link to={to} className="no-underline after:absolute after:inset-0 hover:underline">
+                {title}
+              </Link>
+            ) : (
+              title
+            )}
+          </div>
+          {figure && <div className="max-w-1/2 flex-none text-end">{figure}</div>}
         </div>
         {notes.filter(Boolean).map((note, at) => (
           // biome-ignore lint/suspicious/noArrayIndexKey: lines of one row, never reordered
-          <div key={at} className="text-sm text-ink2">
+          <div key={at} className="text-sm text-ink2 wrap-anywhere">
             {note}
           </div>
         ))}
         {tape && <TapeStrip kind={tape} className="mt-2 w-18" />}
       </div>
-      {figure && <div className="flex-none text-md font-extrabold whitespace-nowrap">{figure}</div>}
       {action && <div className="relative z-10 flex-none">{action}</div>}
     </li>
   );

@@ -87,7 +87,7 @@ export function SearchBox(props: Props) {
             placeholder={placeholder}
             value={value}
             className={clsx(
-              'min-w-0 grow bg-transparent py-1.5 outline-none',
+              'min-w-0 grow self-stretch bg-transparent py-1.5 outline-none',
               place === 'page' ? 'text-md' : 'text-base',
             )}
             onBlur={close}

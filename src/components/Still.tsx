@@ -39,7 +39,7 @@ export function Still({ src, alt = '', length, className, loading = 'lazy' }: Pr
         <EmptyFloor label={alt} />
       )}
       {length && (
-        <span className="absolute right-1 bottom-1 rounded-still bg-shade px-1.25 py-px text-[0.75rem] leading-normal font-bold text-onShade">
+        <span className="absolute right-1 bottom-1 rounded-still bg-shade px-1.25 py-px text-[min(0.75rem,15px)] leading-normal font-bold text-onShade">
           {length}
         </span>
       )}

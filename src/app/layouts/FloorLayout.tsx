@@ -33,14 +33,14 @@ export function FloorLayout({ places, home, search, right, phoneTop = 'mark', wi
       <SkipLink />
       <header
         className={clsx(
-          'flex min-h-13 items-center gap-x-5 px-4.5 pt-1 md:min-h-15 md:border-b-thin md:border-line md:px-[max(1.5rem,calc(50%-54.5rem))] md:pt-0',
+          'flex min-h-13 items-center gap-x-2 px-4.5 md:gap-x-5 pt-1 md:min-h-15 md:border-b-thin md:border-line md:px-[max(1.5rem,calc(50%-54.5rem))] md:pt-0',
           phoneTop === 'none' && 'max-md:hidden',
         )}
       >
         <Link to={home} className="flex min-h-target flex-none items-center no-underline">
           <Wordmark />
         </Link>
-        {search && <div className="hidden w-85 min-w-40 shrink md:block">{search}</div>}
+        {search && <div className="hidden min-w-40 max-w-85 flex-1 md:block">{search}</div>}
         <nav aria-label="Places" className="hidden self-stretch md:flex">
           <ul className="flex">
             {places.map((place) => (

@@ -73,7 +73,10 @@ function LineRow({ team, line }: { team: string; line: MyLine }) {
         line.note,
         !insteadOf && !line.note && line.points[0],
         insteadOf && (
-          <TextLink className="relative z-10" to={teamPath(team, 'dictionary', insteadOf.movement.id)}>
+          <TextLink
+            className="relative z-10 inline-flex min-h-target items-center"
+            to={teamPath(team, 'dictionary', insteadOf.movement.id)}
+          >
             See {insteadOf.movement.name}
           </TextLink>
         ),

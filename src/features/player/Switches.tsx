@@ -27,7 +27,7 @@ export function Switches({ playhead, loop, onLoop, picture, onMirror, captions, 
   const [keys, setKeys] = useState<'open' | 'closed'>('closed');
   return (
     <div className="grid grid-cols-4 gap-2 md:flex md:flex-wrap md:items-center md:gap-x-6">
-      <div className="col-span-4 grid grid-flow-col gap-2 md:flex">
+      <div className="col-span-4 flex flex-wrap gap-2 max-md:*:grow">
         <ToggleChip pressed={loop === 'on'} className={tall} onClick={onLoop}>
           Loop
         </ToggleChip>
@@ -40,7 +40,7 @@ export function Switches({ playhead, loop, onLoop, picture, onMirror, captions, 
           </ToggleChip>
         )}
       </div>
-      <fieldset className="col-span-4 grid grid-cols-4 gap-2 md:flex">
+      <fieldset className="col-span-4 flex flex-wrap gap-2 max-md:*:grow">
         <legend className="sr-only">Speed</legend>
         {rates.map((each) => (
           <ToggleChip

@@ -37,7 +37,10 @@ function GroupHead({ team, group: { heading, movement } }: { team: string; group
     <h2 className="flex flex-wrap items-baseline gap-x-3 text-lg font-extrabold">
       {movement?.name}
       {movement && (
-        <TextLink className="text-sm" to={teamPath(team, 'dictionary', movement.id)}>
+        <TextLink
+          className="-my-3 inline-flex min-h-target items-center text-sm"
+          to={teamPath(team, 'dictionary', movement.id)}
+        >
           points and cautions
         </TextLink>
       )}
