@@ -61,7 +61,7 @@ function LineRow({ team, line }: { team: string; line: MyLine }) {
       title={line.movement.name}
       to={demo ? momentPath(team, demo) : teamPath(team, 'dictionary', line.movement.id)}
       still={{ src: demo?.pictureUrl ?? null, length: demo ? formatMs(demo.endMs - demo.startMs) : 'not filmed' }}
-      figure={formatDose(line.dose)}
+      figure={<DoseFigure words={formatDose(line.dose)} />}
       notes={[
         insteadOf && (
           <>
@@ -83,4 +83,14 @@ function LineRow({ team, line }: { team: string; line: MyLine }) {
       ]}
     />
   );
+}
+
+/** A tempo such as 5-1-1-0 is read as one figure: no line breaks at its hyphens. */
+function DoseFigure({ words }: { words: string }) {
+  return words.split(/(\S*-\S*)/).map((piece, at) => (
+    // biome-ignore lint/suspicious/noArrayIndexKey: pieces of one line, never reordered
+    <span key={at} className={piece.includes('-') ? 'whitespace-nowrap' : undefined}>
+      {piece}
+    </span>
+  ));
 }
