@@ -171,7 +171,8 @@ function presentLine(line: PlannedLine, { dictionary, owned }: Day): Omit<contra
     lineId: line.line.id,
     movement: named(line.movementId),
     dose: line.dose,
-    note: line.line.note,
+    // what the coach wrote about a movement is not true of what is done instead
+    note: line.state === 'replaced' ? '' : line.line.note,
     points: [...(shown?.points ?? [])],
     cautions: [...(shown?.cautions ?? [])],
     insteadOf:

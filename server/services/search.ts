@@ -7,13 +7,15 @@ import type {
   suggest as suggestEndpoint,
 } from '../../shared/contracts/search';
 import { explainRule } from '../../shared/domain/kit/convertDose';
+import type { DoseRule } from '../../shared/domain/kit/doseRule';
 import type { OwnedKit } from '../../shared/domain/kit/kit';
 import { oneReason } from '../../shared/domain/kit/myVersion';
 import { canDo } from '../../shared/domain/kit/owned';
-import { substitutionsFor } from '../../shared/domain/kit/substitutionsFor';
+import { doseFor, substitutionsFor } from '../../shared/domain/kit/substitutionsFor';
 import { wordsOf } from '../../shared/domain/search/plainWords';
 import { type ResolvedQuery, resolve } from '../../shared/domain/search/resolveQuery';
 import { suggest as suggestMovements } from '../../shared/domain/search/suggest';
+import { Dose, formatDose } from '../../shared/domain/training/dose';
 import type { ChapterKind } from '../../shared/domain/words';
 import { ChapterRow } from '../models/marks';
 import type { Actor } from './actor';
@@ -60,6 +62,7 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
 
   const groups: FindingGroup[] = [];
   const notFilmed: string[] = [];
+  const offered = new Set<string>();
   let hiddenByKit = 0;
   for (const id of meant) {
     const movement = dictionary.movements.get(id);
@@ -70,7 +73,11 @@ export async function find(actor: Actor, { q, kit, kind }: Query): Promise<Found
     const fits = usable === null || canDo(movement.kitNeeded, usable);
     const named = { id, name: movement.name };
     const inMyKit = mine.told ? canDo(movement.kitNeeded, mine.items) : null;
-    const others = insteadOf(dictionary, id, ways.get(id) ?? [], (other) => shown.of(other), moments);
+    // what serves for several of the movements that were meant is offered once
+    const others = insteadOf(dictionary, id, ways.get(id) ?? [], (other) => shown.of(other), moments).filter(
+      ({ moment }) => !offered.has(moment.chapterId),
+    );
+    for (const { moment } of others) offered.add(moment.chapterId);
     if (others.length > 0) groups.push({ movement: named, heading: 'insteadOf', inMyKit, findings: others });
     if (!fits) hiddenByKit += demos.length;
     else if (demos.length > 0) groups.push({ movement: named, heading: 'demos', inMyKit, findings: demos });
@@ -157,8 +164,16 @@ function waysAround(dictionary: TeamDictionary, movementId: string, usable: Owne
   if (answer.possible) return [];
   return answer.ways.slice(0, mostWays).map(({ movementId: id, reasons, doseRules }) => ({
     movementId: id,
-    note: [oneReason(reasons), ...doseRules.map(explainRule)].filter(Boolean).map(asSentence).join(' '),
+    note: [oneReason(reasons), becomes(doseRules)].filter(Boolean).map(asSentence).join(' '),
   }));
+}
+
+/** How the dose changes: the rule of one step as the coach wrote it, several steps by what comes out. */
+function becomes(doseRules: readonly DoseRule[]): string {
+  const [rule] = doseRules;
+  if (doseRules.length === 1 && rule) return explainRule(rule);
+  const ten = Dose.parse({ amount: 10, unit: 'reps' });
+  return `10 reps become ${formatDose(doseFor({ doseRules: [...doseRules] }, ten))}`;
 }
 
 const asSentence = (words: string) => `${words.charAt(0).toUpperCase()}${words.slice(1).replace(/\.$/, '')}.`;
