@@ -5,13 +5,13 @@ import { PageTitle } from '../components/PageTitle';
 import { SearchBox } from '../components/SearchBox';
 import { TextButton } from '../components/TextLink';
 import { VisuallyHidden } from '../components/VisuallyHidden';
-import { kitQuery } from '../features/dictionary/api';
 import { FoundMovements } from '../features/dictionary/FoundMovements';
 import { kitById } from '../features/dictionary/kitWords';
 import { MovementRows } from '../features/dictionary/MovementRows';
 import { PatternChips } from '../features/dictionary/PatternChips';
 import { useAddress } from '../features/dictionary/useAddress';
 import { useDictionaryAddress } from '../features/dictionary/useDictionaryAddress';
+import { kitQuery } from '../lib/libraryQueries';
 import { useTeam } from '../lib/session';
 
 /** The dictionary for those who train. */

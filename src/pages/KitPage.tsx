@@ -6,8 +6,8 @@ import { EmptyState } from '../components/EmptyState';
 import { GoButton } from '../components/GoButton';
 import { PageTitle } from '../components/PageTitle';
 import { Table } from '../components/Table';
-import { kitQuery } from '../features/kit/api';
 import { KitItemDialog } from '../features/kit/KitItemDialog';
+import { kitQuery } from '../lib/libraryQueries';
 import { useTeam } from '../lib/session';
 
 export function KitPage() {

@@ -2,12 +2,12 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { useParams, useSearchParams } from 'react-router-dom';
 import { SkeletonRows } from '../components/Skeleton';
-import { kitQuery } from '../features/dictionary/api';
 import { DeskMovement } from '../features/dictionary/DeskMovement';
 import { kitById } from '../features/dictionary/kitWords';
 import { MovementFault } from '../features/dictionary/MovementFault';
 import { NewMovement } from '../features/dictionary/NewMovement';
 import { useMovementPage } from '../features/dictionary/useMovementPage';
+import { kitQuery } from '../lib/libraryQueries';
 import { teamPath, useTeam } from '../lib/session';
 
 /** A movement at the desk; `new` in the address is one that is not there yet. */

@@ -2,11 +2,11 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { useParams } from 'react-router-dom';
 import { SkeletonRows } from '../components/Skeleton';
-import { kitQuery } from '../features/dictionary/api';
 import { FloorMovement } from '../features/dictionary/FloorMovement';
 import { kitById } from '../features/dictionary/kitWords';
 import { MovementFault } from '../features/dictionary/MovementFault';
 import { useMovementPage } from '../features/dictionary/useMovementPage';
+import { kitQuery } from '../lib/libraryQueries';
 import { teamPath, useTeam } from '../lib/session';
 
 /** A movement for those who train. */

@@ -4,7 +4,6 @@ import { useNavigate } from 'react-router-dom';
 import { Button } from '../components/Button';
 import { GoLink } from '../components/GoButton';
 import { PageTitle } from '../components/PageTitle';
-import { kitQuery } from '../features/dictionary/api';
 import { DictionarySearch } from '../features/dictionary/DictionarySearch';
 import { FoundMovements } from '../features/dictionary/FoundMovements';
 import { kitById } from '../features/dictionary/kitWords';
@@ -14,6 +13,7 @@ import { NoMovements } from '../features/dictionary/NoMovements';
 import { useAddress } from '../features/dictionary/useAddress';
 import { useDictionaryAddress } from '../features/dictionary/useDictionaryAddress';
 import { useMergeChoice } from '../features/dictionary/useMergeChoice';
+import { kitQuery } from '../lib/libraryQueries';
 import { teamPath, useTeam } from '../lib/session';
 
 /** The dictionary at the desk. */

@@ -2,8 +2,9 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
 import { EmptyState } from '../components/EmptyState';
 import { PageTitle } from '../components/PageTitle';
-import { kitQuery, myKitQuery } from '../features/kit/api';
+import { myKitQuery } from '../features/kit/api';
 import { MyKitForm } from '../features/kit/MyKitForm';
+import { kitQuery } from '../lib/libraryQueries';
 import { teamPath, useTeam } from '../lib/session';
 
 export function MyKitPage() {

@@ -4,7 +4,6 @@ import { useNavigate, useParams } from 'react-router-dom';
 import type { Session } from '../../shared/contracts/sessions';
 import { ButtonLink } from '../components/Button';
 import { PageTitle } from '../components/PageTitle';
-import { kitQuery } from '../features/movementNames/api';
 import { useMovementNames } from '../features/movementNames/useMovementNames';
 import { teamQuery } from '../features/people/api';
 import { sessionQuery, useMovementFacts } from '../features/plans/api';
@@ -12,6 +11,7 @@ import { PlanDesk, useMovementIds } from '../features/plans/PlanDesk';
 import { PlanReading } from '../features/plans/PlanReading';
 import { SessionRecordings } from '../features/plans/SessionRecordings';
 import { formatDate } from '../lib/format';
+import { kitQuery } from '../lib/libraryQueries';
 import { teamPath, useMay, useMe, useTeam } from '../lib/session';
 
 export function SessionPage() {

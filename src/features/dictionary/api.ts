@@ -7,7 +7,6 @@ import {
   useQueryClient,
 } from '@tanstack/react-query';
 import type { Input, Output } from '../../../shared/contracts/endpoint';
-import { listKit } from '../../../shared/contracts/kit';
 import * as contract from '../../../shared/contracts/movements';
 import type { Pattern } from '../../../shared/domain/words';
 import { call, callWithFile } from '../../lib/api';
@@ -32,19 +31,6 @@ export const movementQuery = (team: string, movementId: string) =>
   queryOptions({
     queryKey: ['movements', team, movementId],
     queryFn: ({ signal }) => call(contract.getMovement, { team, movementId }, { signal }),
-  });
-
-export const movementNamesQuery = (team: string) =>
-  queryOptions({
-    queryKey: ['movements', team, 'names'],
-    queryFn: async ({ signal }) => (await call(contract.listMovementNames, { team }, { signal })).items,
-  });
-
-export const kitQuery = (team: string) =>
-  queryOptions({
-    queryKey: ['kit', team],
-    queryFn: async ({ signal }) => (await call(listKit, { team }, { signal })).items,
-    staleTime: 60_000,
   });
 
 /** The dictionary is read everywhere: lists, plans, the day, search. */

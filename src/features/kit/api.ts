@@ -4,12 +4,6 @@ import * as contract from '../../../shared/contracts/kit';
 import type { OwnedKit } from '../../../shared/domain/kit/kit';
 import { call } from '../../lib/api';
 
-export const kitQuery = (team: string) =>
-  queryOptions({
-    queryKey: ['kit', team],
-    queryFn: async ({ signal }) => (await call(contract.listKit, { team }, { signal })).items,
-  });
-
 export const myKitQuery = (team: string) =>
   queryOptions({
     queryKey: ['my-kit', team],

@@ -11,7 +11,8 @@ import { Dialog } from '../../components/Dialog';
 import { GoButton } from '../../components/GoButton';
 import { SelectField, TextField } from '../../components/TextField';
 import { ApiError } from '../../lib/api';
-import { kitQuery, useCreateMovement } from './api';
+import { kitQuery } from '../../lib/libraryQueries';
+import { useCreateMovement } from './api';
 
 const NewMovement = z.object({
   name: MovementName,

@@ -1,22 +1,8 @@
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import { useMutation, useQueryClient } from '@tanstack/react-query';
 import type { Input } from '../../../shared/contracts/endpoint';
-import { listKit } from '../../../shared/contracts/kit';
-import { createMovement, listMovementNames } from '../../../shared/contracts/movements';
+import { createMovement } from '../../../shared/contracts/movements';
 import { call } from '../../lib/api';
-
-export const movementNamesQuery = (team: string) =>
-  queryOptions({
-    queryKey: ['movements', team, 'names'],
-    queryFn: async ({ signal }) => (await call(listMovementNames, { team }, { signal })).items,
-    staleTime: 60_000,
-  });
-
-export const kitQuery = (team: string) =>
-  queryOptions({
-    queryKey: ['kit', team],
-    queryFn: async ({ signal }) => (await call(listKit, { team }, { signal })).items,
-    staleTime: 60_000,
-  });
+import { movementNamesQuery } from '../../lib/libraryQueries';
 
 export function useCreateMovement(team: string) {
   const queries = useQueryClient();

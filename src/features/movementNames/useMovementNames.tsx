@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { type ReactNode, useCallback, useMemo, useState } from 'react';
-import { movementNamesQuery } from './api';
+import { movementNamesQuery } from '../../lib/libraryQueries';
 import { NewMovementDialog } from './NewMovementDialog';
 
 type Named = { id: string; name: string };
