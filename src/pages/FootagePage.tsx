@@ -1,9 +1,11 @@
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
+import { useSearchParams } from 'react-router-dom';
 import { EmptyState } from '../components/EmptyState';
 import { FileButton } from '../components/FileButton';
 import { Icon } from '../components/Icon';
 import { PageTitle } from '../components/PageTitle';
+import { sessionQuery } from '../features/plans/api';
 import { sessionsToChooseQuery } from '../features/recordings/api';
 import { RecordingList } from '../features/recordings/RecordingList';
 import { sessionOptions } from '../features/recordings/sessionOptions';
@@ -22,7 +24,7 @@ export function FootagePage() {
   const personId = useMe()?.id;
   const mayUpload = useMay('uploadFootage');
   const sessions = useQuery(sessionsToChooseQuery(team));
-  const [session, setSession] = useState<SessionChoice>({ by: 'fileDate' });
+  const [{ session, asked }, choose] = useSessionChoice(team);
   const [notTaken, setNotTaken] = useState<NotTaken[]>([]);
   const take = (files: File[]) => {
     if (personId) setNotTaken(addFiles(files, { personId, team, session }));
@@ -50,7 +52,7 @@ export function FootagePage() {
       {mayUpload && (
         <>
           <div className="mt-3">
-            <UploadTo options={sessionOptions(sessions.data ?? [], null)} choice={session} onChange={setSession} />
+            <UploadTo options={sessionOptions(sessions.data ?? [], asked)} choice={session} onChange={choose} />
           </div>
           <NotTakenList files={notTaken} onClose={() => setNotTaken([])} />
           <DropZone onFiles={take} />
@@ -70,4 +72,14 @@ export function FootagePage() {
       </div>
     </>
   );
+}
+
+/** The choice made here, else the session that the address names: a session's own page leads here with it. */
+function useSessionChoice(team: string) {
+  const [address] = useSearchParams();
+  const id = address.get('session');
+  const { data: asked } = useQuery({ ...sessionQuery(team, id ?? ''), enabled: id !== null });
+  const [chosen, choose] = useState<SessionChoice | null>(null);
+  const session: SessionChoice = chosen ?? (asked ? { by: 'choice', sessionId: asked.id } : { by: 'fileDate' });
+  return [{ session, asked: asked ?? null }, choose] as const;
 }

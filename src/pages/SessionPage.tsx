@@ -42,7 +42,7 @@ function Written({ session }: { session: Session }) {
         library={library}
         meta={({ date }) => `${date ? formatDate(date, team.today) : 'no day yet'} · ${session.state}`}
         actions={session.state === 'published' && <AsMembers team={slug} date={session.date} />}
-        aside={<SessionRecordings team={slug} recordings={session.recordings} />}
+        aside={<SessionRecordings team={slug} session={session} />}
         onRemoved={() => navigate(teamPath(slug, 'sessions'), { replace: true })}
       />
       {dialog}
@@ -69,7 +69,7 @@ function Read({ session }: { session: Session }) {
       </p>
       <div className="grid items-start gap-x-7 gap-y-10 xl:grid-cols-[minmax(0,1fr)_22rem]">
         <PlanReading session={session} library={library} />
-        <SessionRecordings team={slug} recordings={session.recordings} />
+        <SessionRecordings team={slug} session={session} />
       </div>
     </div>
   );

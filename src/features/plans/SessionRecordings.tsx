@@ -9,12 +9,12 @@ import { teamPath } from '../../lib/session';
 type Recording = Session['recordings'][number];
 
 /** The footage of a session, with the ways to mark it and to watch it. */
-export function SessionRecordings({ team, recordings }: { team: string; recordings: readonly Recording[] }) {
+export function SessionRecordings({ team, session: { id, recordings } }: { team: string; session: Session }) {
   return (
     <Section
       title="Recordings"
       place="aside"
-      actions={<TextLink to={teamPath(team, 'footage')}>Bring footage in</TextLink>}
+      actions={<TextLink to={`${teamPath(team, 'footage')}?session=${id}`}>Bring footage in</TextLink>}
     >
       {recordings.length === 0 ? (
         <p className="text-sm text-ink2">
