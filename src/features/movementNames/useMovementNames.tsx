@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { type ReactNode, useCallback, useMemo, useState } from 'react';
+import { flushSync } from 'react-dom';
 import { movementNamesQuery } from '../../lib/libraryQueries';
 import { NewMovementDialog } from './NewMovementDialog';
 
@@ -22,7 +23,8 @@ export function useMovementNames(team: string) {
       name={asked.name}
       onClose={() => setAsked(null)}
       onMade={(movement) => {
-        setAsked(null);
+        // the focus is back in the field before the movement is taken, so that it goes on from there
+        flushSync(() => setAsked(null));
         asked.then(movement);
       }}
     />
