@@ -101,11 +101,10 @@ function Mark({ recording, chapters }: { recording: Recording; chapters: Chapter
           </>
         }
       />
-      <div className="mt-1 flex flex-wrap gap-x-1 gap-y-1">
+      <div className="-ms-3 mt-1 flex flex-wrap gap-1">
         <Button
           look="quiet"
           size="small"
-          className="-ms-3"
           onClick={() => {
             // another session takes the blocks off the chapters that are saved
             void kept.flush();

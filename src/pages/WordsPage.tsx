@@ -116,8 +116,8 @@ function Words({ recording, captions, cues, chapters }: Props) {
           .join(' · ')}
         actions={<SaveState state={save} onRetry={() => void kept.flush()} onCompare={() => setOpen('compare')} />}
       />
-      <div className="mt-1 flex flex-wrap gap-1">
-        <ButtonLink look="quiet" size="small" className="-ms-3" to={teamPath(team, 'footage', recording.id)}>
+      <div className="-ms-3 mt-1 flex flex-wrap gap-1">
+        <ButtonLink look="quiet" size="small" to={teamPath(team, 'footage', recording.id)}>
           <Icon name="film" size={16} /> Chapters
         </ButtonLink>
         <ImportCaptions team={team} recordingId={recording.id} kept={kept} />

@@ -53,7 +53,10 @@ export function ChapterForm({ chapter, edits, library, blocks, playhead }: Props
           id="chapter-title"
           label={
             <>
-              Title <Key name="t" />
+              Title {/* no higher than the label beside it */}
+              <span className="-my-1 inline-flex align-middle">
+                <Key name="t" />
+              </span>
             </>
           }
           maxLength={120}

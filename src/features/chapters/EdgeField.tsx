@@ -21,7 +21,7 @@ export function EdgeField({ edge, chapter, edits, playhead }: Props) {
   const name = edge === 'start' ? 'Start' : 'End';
   return (
     <div>
-      <div className="flex items-end gap-2">
+      <div className="flex items-start gap-2">
         <TimeField
           label={name}
           value={value}
@@ -30,6 +30,8 @@ export function EdgeField({ edge, chapter, edits, playhead }: Props) {
         />
         <Button
           size="small"
+          // the height of the label, and half of what a field is taller
+          className="mt-6.5"
           aria-label={`Set the ${edge} to where the picture is`}
           onClick={() => edits.move(chapter.id, edge, playhead.atMs())}
         >
