@@ -59,6 +59,7 @@ export function PeopleTable({ team, people, myId }: { team: string; people: read
             cell: (person) => (
               <Button
                 size="small"
+                className="whitespace-nowrap"
                 onClick={() => setLeaving(person)}
                 aria-label={`Take ${person.name} out of the team`}
               >
