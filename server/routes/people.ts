@@ -86,7 +86,7 @@ function presentInvitation({ link, role, invitedBy }: invitations.Invited) {
   };
 }
 
-function presentAuditEntry({ event, actor }: ItemOf<typeof auditTrail.listAudit>) {
+function presentAuditEntry({ event, actor, subject }: ItemOf<typeof auditTrail.listAudit>) {
   return {
     id: event.id,
     at: event.createdAt.toISOString(),
@@ -94,6 +94,7 @@ function presentAuditEntry({ event, actor }: ItemOf<typeof auditTrail.listAudit>
     action: event.action,
     subjectType: event.subjectType,
     subjectId: event.subjectId,
+    subject,
     details: event.details,
   };
 }

@@ -110,8 +110,12 @@ export const AuditEntry = z.object({
   action: z.string(),
   subjectType: z.string(),
   subjectId: Id.nullable(),
+  /** what it is called now; nothing where it is gone or has no name */
+  subject: z.string().nullable(),
   details: z.record(z.string(), z.unknown()),
 });
+
+export type AuditEntry = z.infer<typeof AuditEntry>;
 
 export const listAudit = endpoint({
   method: 'get',

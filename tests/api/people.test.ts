@@ -223,6 +223,23 @@ describe('the audit trail', () => {
     });
   });
 
+  it('says by its present name what each entry is about, and nothing of what is gone', async () => {
+    const { team, owner, member } = await makeTeamOfFour();
+    const browser = await api.signedIn(owner);
+    const day = `/api/teams/${team.slug}/sessions`;
+    const make = async (title: string) =>
+      (await browser.post(day).send({ id: randomUUID(), date: '2026-03-02', title }).expect(201)).body;
+    const [kept, gone] = [await make('Slow hinge'), await make('Not this one')];
+    await browser.delete(`${day}/${gone.id}`).expect(200);
+    await browser.patch(`/api/teams/${team.slug}/people/${member.id}`).send({ role: 'editor' }).expect(200);
+    const entries = await allPages(browser, `/api/teams/${team.slug}/audit`, 10);
+    const subjectOf = (action: string, id: string) =>
+      entries.find((entry) => entry.action === action && entry.subjectId === id)?.subject;
+    expect(subjectOf('session.created', kept.id)).toBe('Slow hinge');
+    expect(subjectOf('session.removed', gone.id)).toBeNull();
+    expect(subjectOf('person.roleChanged', member.id)).toBe(member.name);
+  });
+
   it('leaves nothing behind of a change that was refused', async () => {
     const { team, owner } = await makeTeamOfFour();
     const browser = await api.signedIn(owner);
