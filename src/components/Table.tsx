@@ -24,6 +24,8 @@ type Props<Row> = {
   rowState?: (row: Row) => 'plain' | 'at' | 'dim';
   /** stays in view while the page scrolls */
   head?: 'plain' | 'sticky';
+  /** how much a row's cells hold: beside fields and buttons a single line stands in the middle */
+  lines?: 'several' | 'one';
 };
 
 /** In some browsers a changed `display` takes a table's roles away, so they are written down. */
@@ -37,7 +39,15 @@ const as = {
 } as const;
 
 /** A real table; where its columns don't fit, every row becomes a short list with the columns' names (see table.css). */
-export function Table<Row>({ caption, columns, rows, rowKey, rowState, head = 'plain' }: Props<Row>) {
+export function Table<Row>({
+  caption,
+  columns,
+  rows,
+  rowKey,
+  rowState,
+  head = 'plain',
+  lines = 'several',
+}: Props<Row>) {
   return (
     <div className="stacks">
       <table {...as.table} className="w-full border-collapse text-start">
@@ -62,7 +72,7 @@ export function Table<Row>({ caption, columns, rows, rowKey, rowState, head = 'p
         </thead>
         <tbody {...as.rowgroup}>
           {rows.map((row) => (
-            <TableRow key={rowKey(row)} columns={columns} row={row} state={rowState?.(row) ?? 'plain'} />
+            <TableRow key={rowKey(row)} columns={columns} row={row} state={rowState?.(row) ?? 'plain'} lines={lines} />
           ))}
         </tbody>
       </table>
@@ -74,10 +84,12 @@ function TableRow<Row>({
   columns,
   row,
   state,
+  lines,
 }: {
   columns: readonly Column<Row>[];
   row: Row;
   state: 'plain' | 'at' | 'dim';
+  lines: 'several' | 'one';
 }) {
   return (
     <tr
@@ -87,7 +99,8 @@ function TableRow<Row>({
     >
       {columns.map((column) => {
         const look = clsx(
-          'border-b border-line px-2.5 py-2 align-top text-sm',
+          'border-b border-line px-2.5 py-2 text-sm',
+          lines === 'several' ? 'align-top' : 'align-middle',
           column.align === 'end' ? 'text-end' : 'text-start',
           column.role === 'name' && 'font-extrabold',
           column.role === 'figure' && 'whitespace-nowrap',

@@ -25,6 +25,7 @@ export function PeopleTable({ team, people, myId }: { team: string; people: read
       <FormFault>{changeRole.error?.message}</FormFault>
       <Table
         caption="People in the team"
+        lines="one"
         rows={people}
         rowKey={(person) => person.id}
         columns={[
