@@ -3,7 +3,7 @@ import { type ReactNode, useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Recording } from '../../../shared/contracts/recordings';
 import { formatMs } from '../../../shared/domain/timecode';
-import { ButtonLink } from '../../components/Button';
+import { Button, ButtonLink } from '../../components/Button';
 import { Icon } from '../../components/Icon';
 import { Menu, type MenuItem } from '../../components/Menu';
 import { Still } from '../../components/Still';
@@ -72,6 +72,11 @@ export function RecordingRow({ team, recording, upload }: Props) {
                 Watch
               </ButtonLink>
             </>
+          )}
+          {state === 'failed' && mayRemove && (
+            <Button size="small" onClick={() => setOpen('remove')} aria-label={`Remove ${title}`}>
+              Remove
+            </Button>
           )}
           <Menu
             label={<Icon name="more" size={18} />}
