@@ -51,7 +51,7 @@ export function CaptionList({ lines, edits, playhead, profile, picture, places, 
   return (
     <section
       ref={box}
-      className="h-[min(70dvh,48rem)] overflow-y-auto overflow-x-hidden min-[56.25rem]:h-[calc(100dvh-13rem)] min-[56.25rem]:min-h-100"
+      className="max-h-[min(70dvh,48rem)] overflow-y-auto overflow-x-hidden min-[56.25rem]:h-[calc(100dvh-13rem)] min-[56.25rem]:max-h-none min-[56.25rem]:min-h-100"
       // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls is reached by the keyboard
       tabIndex={0}
       aria-label="Caption lines"

@@ -36,7 +36,8 @@ export function ChapterRow({ chapter, state, playing, faults, names, kit, block,
     <li
       ref={row}
       className={clsx(
-        'scroll-my-4 border-b border-line last:border-b-0',
+        // clear of the picture that stays in view above the list on a phone
+        'scroll-my-4 border-b border-line last:border-b-0 max-sm:[@media(min-height:40rem)]:scroll-mt-[60vw]',
         state === 'open' && 'bg-tint',
         playing ? 'border-l-4 border-l-yellow' : 'border-l-4 border-l-transparent',
       )}
