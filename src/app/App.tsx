@@ -11,7 +11,13 @@ export function App() {
   const [queries] = useState(makeQueryClient);
   return (
     <QueryClientProvider client={queries}>
-      <Suspense fallback={<Waiting label="The page is on its way" />}>
+      <Suspense
+        fallback={
+          <div className="p-5">
+            <Waiting label="The page is on its way" />
+          </div>
+        }
+      >
         <RouterProvider router={router} />
       </Suspense>
       <ToastRegion />

@@ -16,6 +16,10 @@ export function PageFault() {
         <ErrorPage title="There is nothing here" actions={home}>
           {error.code === 'notFound' ? error.message : 'The address is wrong.'}
         </ErrorPage>
+      ) : error instanceof ApiError && error.code === 'notAllowed' ? (
+        <ErrorPage title="This page is not for your role" actions={home}>
+          {error.message} The owner can give you another one.
+        </ErrorPage>
       ) : isOldPage(error) ? (
         <ErrorPage title="Tapeline was updated meanwhile" actions={again}>
           This page is from before. Load it again to go on; nothing that was saved is lost.

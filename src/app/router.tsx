@@ -118,5 +118,13 @@ const pages: RouteObject[] = [
 ];
 
 export const router = createBrowserRouter([
-  { errorElement: <PageFault />, hydrateFallbackElement: <Waiting label="The page is on its way" />, children: pages },
+  {
+    errorElement: <PageFault />,
+    hydrateFallbackElement: (
+      <div className="p-5">
+        <Waiting label="The page is on its way" />
+      </div>
+    ),
+    children: pages,
+  },
 ]);
