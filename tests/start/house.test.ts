@@ -19,7 +19,8 @@ beforeEach(() => {
 });
 afterEach(async () => {
   for (const launcher of launchers.splice(0)) launcher.kill('SIGKILL');
-  await expect.poll(pidsBelow, { timeout: 15_000 }).toEqual([]);
+  // what matters is that they end; how soon depends on what else this machine does
+  await expect.poll(pidsBelow, { timeout: 60_000 }).toEqual([]);
   await stopCluster(path.join(data, 'postgres'));
   rmSync(folder, { recursive: true, force: true });
 });
