@@ -56,7 +56,7 @@ export function InviteForm({ team }: { team: string }) {
         <SelectField label="Role" options={roleOptions} error={errors.role?.message} {...form.register('role')} />
       </div>
       <p className="text-sm text-ink2">
-        {roleWords[role].name} {roleWords[role].does}.
+        {roleWords[role].name}: {roleWords[role].does}.
       </p>
       <FormFault>{fault}</FormFault>
       <div className="flex flex-wrap items-center gap-4">
