@@ -2,8 +2,7 @@ import path from 'node:path';
 import { expect, team, test } from './support/people';
 
 /** The picture that README shows: `README_PICTURE=yes` renews it, any other run proves that it can be made. */
-test('the picture of the README is made', async ({ as, isMobile }, info) => {
-  test.skip(isMobile, 'it shows a desktop');
+test('the picture of the README is made', async ({ as }, info) => {
   const page = await as('member');
   const demo = page.getByRole('link', { name: /^Demo/ }).first();
   // the demo team's recordings are still being drawn when a run begins
