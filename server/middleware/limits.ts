@@ -23,7 +23,7 @@ const perMailbox = { points: 5, seconds: 3600 };
 
 export type Limits = ReturnType<typeof openLimits>;
 
-export function openLimits(pool: pg.Pool, scale = 1) {
+export function openLimits(pool: pg.Pool) {
   const open = (keyPrefix: string, { points, seconds }: { points: number; seconds: number }) =>
     new RateLimiterPostgres({
       storeClient: pool,
@@ -31,7 +31,7 @@ export function openLimits(pool: pg.Pool, scale = 1) {
       tableName: 'rate_limits',
       tableCreated: true,
       keyPrefix,
-      points: Math.ceil(points * scale),
+      points,
       duration: seconds,
       // rows whose time is over go; the timer holds up no exit
       clearExpiredByTimeout: true,
